@@ -1,0 +1,2 @@
+export { Failure, assertNever } from './failure'
+export type { FailureCode, FailureDetails, Fault } from './failure'
