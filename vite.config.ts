@@ -15,7 +15,10 @@ const alias = {
 }
 
 export default defineConfig({
-  plugins: [vue({ template: { transformAssetUrls } }), quasar({ sassVariables: at('./src/css/quasar-variables.sass') })],
+  plugins: [
+    vue({ template: { transformAssetUrls } }),
+    quasar({ sassVariables: at('./src/css/quasar-variables.sass') }),
+  ],
   resolve: { alias },
   server: { host: '127.0.0.1', proxy: { '/api': apiTarget } },
   build: { target: 'es2022', outDir: 'dist/client', emptyOutDir: true },
@@ -25,10 +28,19 @@ export default defineConfig({
     env: { TZ: 'UTC' },
     projects: [
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
-      { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], environment: 'node' } },
       {
         extends: true,
-        test: { name: 'api', include: ['tests/api/**/*.test.ts'], environment: 'node', testTimeout: 30_000, hookTimeout: 60_000 },
+        test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], environment: 'node' },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'api',
+          include: ['tests/api/**/*.test.ts'],
+          environment: 'node',
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
       },
       {
         extends: true,
