@@ -19,13 +19,16 @@ export {
 } from './scalars'
 export type { IdOf, RoleName, UnitsName, VocabularyName } from './scalars'
 export {
-  BasisSchema,
-  MemberSchema,
-  DraftMemberSchema,
+  PlainLength,
+  basisSchemaOf,
+  sectionSchemaOf,
   SectionSchema,
+  DraftMemberSchema,
   DraftSectionSchema,
   SectionEditSchema,
 } from './section'
+export type { LengthSchema } from './section'
+export { pointerOf, faultsOf } from './faults'
 export {
   SignInRequest,
   FirstManagerRequest,
@@ -177,3 +180,12 @@ export type {
   PlannedLengthView,
   PlannedCutView,
 } from './lengths'
+export {
+  COMMISSION_FILE_BYTES,
+  readCommissionFile,
+  readCommissionText,
+  commissionFileJsonSchema,
+} from './commission-file'
+export type { CommissionFile, CommissionFilePicture, FileReading } from './commission-file'
+export { CheckAnswer, CommissionAnswerSchema, commissionAnswerJsonSchema } from './commission-answer'
+export type { CommissionAnswerData } from './commission-answer'

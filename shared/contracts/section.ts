@@ -1,134 +1,106 @@
 import { z } from 'zod'
 import type { DraftSection, Section, SectionEdit } from '@shared/section'
 
-const text500 = z.string().min(1).max(500)
+/**
+ * How a length is written: a bare number of millimetres between programs, or in a commission file perhaps inches and
+ * fractions. Every schema below is made for one way of writing, and always gives millimetres.
+ */
+export type LengthSchema = z.ZodType<number>
+
 /** Wide on purpose: whether a dimension makes sense is said by shared/section with the place and the mend, not by a bare range here. */
-const mm = z.number().min(-10_000).max(10_000)
+export const PlainLength: LengthSchema = z.number().min(-10_000).max(10_000)
+
+const text500 = z.string().min(1).max(500)
 const degrees = z.number().min(-360).max(360)
 const count = z.int().min(1).max(1000)
+const key = z.string().min(1).max(64)
 
-export const BasisSchema = z.discriminatedUnion('kind', [
+export const basisSchemaOf = (length: LengthSchema) =>
+  z.discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('measured'), plusMinus: length, photograph: text500.exactOptional() }),
+    z.strictObject({ kind: z.literal('precedent'), citation: text500 }),
+    z.strictObject({ kind: z.literal('judged'), note: text500 }),
+  ])
+
+/** The fourteen kinds of member; `extra` is added to each (a draft's key). */
+function memberSchemaOf<Extra extends z.ZodRawShape>(length: LengthSchema, extra: Extra) {
+  const basis = basisSchemaOf(length)
+  const common = {
+    width: length,
+    rise: length,
+    basis: z.strictObject({ width: basis.exactOptional(), rise: basis.exactOptional() }).exactOptional(),
+    ...extra,
+  }
+  const arc = degrees.exactOptional()
+  const pair = z.tuple([length, length])
+  return z.discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('fillet'), ...common }),
+    z.strictObject({ kind: z.literal('splay'), ...common }),
+    z.strictObject({ kind: z.literal('cavetto'), ...common, arc }),
+    z.strictObject({ kind: z.literal('ovolo'), ...common, arc }),
+    z.strictObject({ kind: z.literal('thumb'), ...common, hollow: z.boolean().exactOptional() }),
+    z.strictObject({ kind: z.literal('cyma-recta'), ...common, arc }),
+    z.strictObject({ kind: z.literal('cyma-reversa'), ...common, arc }),
+    z.strictObject({ kind: z.literal('scotia'), ...common }),
+    z.strictObject({ kind: z.literal('torus'), ...common }),
+    z.strictObject({ kind: z.literal('bead'), ...common }),
+    z.strictObject({ kind: z.literal('reeds'), ...common, count, fillet: length.default(0) }),
+    z.strictObject({ kind: z.literal('flutes'), ...common, count, fillet: length.default(0), depth: length }),
+    z.strictObject({ kind: z.literal('quirk'), ...common, depth: length, shape: z.enum(['square', 'v']) }),
+    z.strictObject({
+      kind: z.literal('free'),
+      ...common,
+      curves: z
+        .array(z.tuple([pair, pair, pair]))
+        .min(1)
+        .max(500),
+      corners: z.array(z.int().min(1)).max(500).exactOptional(),
+    }),
+  ])
+}
+
+const sectionShapeOf = (length: LengthSchema) => ({
+  sightEdgeHeight: length,
+  rebate: z.strictObject({ width: length, depth: length }),
+  backSplay: z.strictObject({ x: length, height: length }).default({ x: 0, height: 0 }),
+  tolerance: length.default(0.2),
+  basis: z.strictObject({ sightEdgeHeight: basisSchemaOf(length).exactOptional() }).exactOptional(),
+})
+const gessoSchemaOf = <Break extends z.ZodType>(length: LengthSchema, breakSchema: Break) =>
+  z.union([
+    length,
+    z.array(z.strictObject({ from: breakSchema, to: breakSchema, thickness: length })).max(1000),
+  ])
+
+/** A section of a commission file: what is left out takes its default. */
+export const sectionSchemaOf = (length: LengthSchema) =>
   z.strictObject({
-    kind: z.literal('measured'),
-    plusMinus: z.number().min(0).max(10_000),
-    photograph: text500.exactOptional(),
-  }),
-  z.strictObject({ kind: z.literal('precedent'), citation: text500 }),
-  z.strictObject({ kind: z.literal('judged'), note: text500 }),
-])
+    ...sectionShapeOf(length),
+    gesso: gessoSchemaOf(length, z.int().min(0)).default(0),
+    members: z.array(memberSchemaOf(length, {})).min(1).max(1000),
+  })
 
-const common = {
-  width: mm,
-  rise: mm,
-  basis: z
-    .strictObject({ width: BasisSchema.exactOptional(), rise: BasisSchema.exactOptional() })
-    .exactOptional(),
-}
-const pair = z.tuple([mm, mm])
-const withKey = { key: z.string().min(1).max(64) }
+/** A section whole, as an issue freezes it. */
+export const SectionSchema = sectionSchemaOf(PlainLength) satisfies z.ZodType<Section>
 
-const shapes = {
-  fillet: { kind: z.literal('fillet'), ...common },
-  splay: { kind: z.literal('splay'), ...common },
-  cavetto: { kind: z.literal('cavetto'), ...common, arc: degrees.exactOptional() },
-  ovolo: { kind: z.literal('ovolo'), ...common, arc: degrees.exactOptional() },
-  thumb: { kind: z.literal('thumb'), ...common, hollow: z.boolean().exactOptional() },
-  cymaRecta: { kind: z.literal('cyma-recta'), ...common, arc: degrees.exactOptional() },
-  cymaReversa: { kind: z.literal('cyma-reversa'), ...common, arc: degrees.exactOptional() },
-  scotia: { kind: z.literal('scotia'), ...common },
-  torus: { kind: z.literal('torus'), ...common },
-  bead: { kind: z.literal('bead'), ...common },
-  reeds: { kind: z.literal('reeds'), ...common, count, fillet: mm },
-  flutes: { kind: z.literal('flutes'), ...common, count, fillet: mm, depth: mm },
-  quirk: { kind: z.literal('quirk'), ...common, depth: mm, shape: z.enum(['square', 'v']) },
-  free: {
-    kind: z.literal('free'),
-    ...common,
-    curves: z
-      .array(z.tuple([pair, pair, pair]))
-      .min(1)
-      .max(500),
-    corners: z.array(z.int().min(1)).max(500).exactOptional(),
-  },
-}
+export const DraftMemberSchema = memberSchemaOf(PlainLength, { key })
+const draftGesso = gessoSchemaOf(PlainLength, key)
 
-export const MemberSchema = z.discriminatedUnion('kind', [
-  z.strictObject(shapes.fillet),
-  z.strictObject(shapes.splay),
-  z.strictObject(shapes.cavetto),
-  z.strictObject(shapes.ovolo),
-  z.strictObject(shapes.thumb),
-  z.strictObject(shapes.cymaRecta),
-  z.strictObject(shapes.cymaReversa),
-  z.strictObject(shapes.scotia),
-  z.strictObject(shapes.torus),
-  z.strictObject(shapes.bead),
-  z.strictObject(shapes.reeds),
-  z.strictObject(shapes.flutes),
-  z.strictObject(shapes.quirk),
-  z.strictObject(shapes.free),
-])
-
-export const DraftMemberSchema = z.discriminatedUnion('kind', [
-  z.strictObject({ ...shapes.fillet, ...withKey }),
-  z.strictObject({ ...shapes.splay, ...withKey }),
-  z.strictObject({ ...shapes.cavetto, ...withKey }),
-  z.strictObject({ ...shapes.ovolo, ...withKey }),
-  z.strictObject({ ...shapes.thumb, ...withKey }),
-  z.strictObject({ ...shapes.cymaRecta, ...withKey }),
-  z.strictObject({ ...shapes.cymaReversa, ...withKey }),
-  z.strictObject({ ...shapes.scotia, ...withKey }),
-  z.strictObject({ ...shapes.torus, ...withKey }),
-  z.strictObject({ ...shapes.bead, ...withKey }),
-  z.strictObject({ ...shapes.reeds, ...withKey }),
-  z.strictObject({ ...shapes.flutes, ...withKey }),
-  z.strictObject({ ...shapes.quirk, ...withKey }),
-  z.strictObject({ ...shapes.free, ...withKey }),
-])
-
-const frameOfSection = {
-  sightEdgeHeight: mm,
-  rebate: z.strictObject({ width: mm, depth: mm }),
-  backSplay: z.strictObject({ x: mm, height: mm }),
-  tolerance: z.number().min(0).max(100),
-  basis: z.strictObject({ sightEdgeHeight: BasisSchema.exactOptional() }).exactOptional(),
-}
-const gessoStretches = z
-  .array(z.strictObject({ from: z.int().min(0), to: z.int().min(0), thickness: mm }))
-  .max(1000)
-const draftGessoStretches = z
-  .array(z.strictObject({ from: z.string().min(1).max(64), to: z.string().min(1).max(64), thickness: mm }))
-  .max(1000)
-
-/** A section whole, as an issue freezes it (defaults filled in). */
-export const SectionSchema = z.strictObject({
-  ...frameOfSection,
-  gesso: z.union([mm, gessoStretches]),
-  members: z.array(MemberSchema).max(1000),
-}) satisfies z.ZodType<Section>
-
-/** A section being drawn: members and stretches held by keys. */
+/** A section being drawn: members and stretches held by keys; it may still be bare. */
 export const DraftSectionSchema = z.strictObject({
-  ...frameOfSection,
-  gesso: z.union([mm, draftGessoStretches]),
+  ...sectionShapeOf(PlainLength),
+  gesso: draftGesso.default(0),
   members: z.array(DraftMemberSchema).max(1000),
 }) satisfies z.ZodType<DraftSection>
 
+const shape = sectionShapeOf(PlainLength)
 const setField = z.discriminatedUnion('field', [
-  z.strictObject({ act: z.literal('set'), field: z.literal('sightEdgeHeight'), value: mm }),
-  z.strictObject({ act: z.literal('set'), field: z.literal('rebate'), value: frameOfSection.rebate }),
-  z.strictObject({ act: z.literal('set'), field: z.literal('backSplay'), value: frameOfSection.backSplay }),
-  z.strictObject({
-    act: z.literal('set'),
-    field: z.literal('gesso'),
-    value: z.union([mm, draftGessoStretches]),
-  }),
-  z.strictObject({ act: z.literal('set'), field: z.literal('tolerance'), value: frameOfSection.tolerance }),
-  z.strictObject({
-    act: z.literal('set'),
-    field: z.literal('basis'),
-    value: z.strictObject({ sightEdgeHeight: BasisSchema.exactOptional() }),
-  }),
+  z.strictObject({ act: z.literal('set'), field: z.literal('sightEdgeHeight'), value: PlainLength }),
+  z.strictObject({ act: z.literal('set'), field: z.literal('rebate'), value: shape.rebate }),
+  z.strictObject({ act: z.literal('set'), field: z.literal('backSplay'), value: shape.backSplay.unwrap() }),
+  z.strictObject({ act: z.literal('set'), field: z.literal('gesso'), value: draftGesso }),
+  z.strictObject({ act: z.literal('set'), field: z.literal('tolerance'), value: PlainLength }),
+  z.strictObject({ act: z.literal('set'), field: z.literal('basis'), value: shape.basis.unwrap() }),
 ])
 
 /** One step of drawing. */
@@ -136,9 +108,9 @@ export const SectionEditSchema: z.ZodType<SectionEdit> = z.lazy(() =>
   z.union([
     setField,
     z.strictObject({ act: z.literal('put-in'), at: z.int().min(0), member: DraftMemberSchema }),
-    z.strictObject({ act: z.literal('take-out'), key: withKey.key }),
-    z.strictObject({ act: z.literal('move'), key: withKey.key, to: z.int().min(0) }),
-    z.strictObject({ act: z.literal('change'), key: withKey.key, member: DraftMemberSchema }),
+    z.strictObject({ act: z.literal('take-out'), key }),
+    z.strictObject({ act: z.literal('move'), key, to: z.int().min(0) }),
+    z.strictObject({ act: z.literal('change'), key, member: DraftMemberSchema }),
     z.strictObject({ act: z.literal('together'), edits: z.array(SectionEditSchema).max(1000) }),
     z.strictObject({ act: z.literal('replace-all'), section: DraftSectionSchema }),
   ]),
