@@ -83,10 +83,10 @@ export function cubicMetresOf(
   return (roughSectionMm2(blank) * lengthMm) / 1e9
 }
 
-/** What to buy so that a share of it (0.2 = 20 %, less than 1) may fall to waste: amount / (1 − share). */
+/** What to buy when a share of the amount (0.2 = 20 % more) goes to waste: amount × (1 + share), as for leaf and reserves. */
 export function withWaste(amount: number, share: number): number {
-  if (share >= 0 && share < 1) return amount / (1 - share)
-  const says = `The share of waste is ${share}; give one from 0 to less than 1, such as 0.2 for 20 %.`
+  if (Number.isFinite(share) && share >= 0) return amount * (1 + share)
+  const says = `The share of waste is ${share}; it must be 0 or more, such as 0.2 for 20 %.`
   throw new Failure('input-invalid', { says, faults: [{ path: '/waste', code: 'out-of-range', says }] })
 }
 
