@@ -1,6 +1,6 @@
 export { eventsIn, nextState } from './transition'
 export type { Course } from './transition'
-export { ORDER_COURSE, isFirstOffSettled, isOrderOpen, resumedState } from './order'
+export { ORDER_COURSE, isFirstOffSettled, isOrderOpen } from './order'
 export type { OrderEventName, OrderStateName } from './order'
 export { ISSUE_COURSE, issueLetterOf } from './issue'
 export type { IssueEventName, IssueStateName } from './issue'

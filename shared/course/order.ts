@@ -35,7 +35,7 @@ export type OrderEventName =
 
 /**
  * The course of a knife order. `hold` remembers the state it came from; `resume` leads back there, so its target
- * in the table is only the name `held`: services put the remembered state in its place (see resumedState).
+ * in the table is only the name `held`: services put the remembered state in its place.
  */
 export const ORDER_COURSE: Course<OrderStateName, OrderEventName> = {
   prepared: { send: 'queued', cancel: 'cancelled', hold: 'held' },
@@ -74,10 +74,6 @@ export const ORDER_COURSE: Course<OrderStateName, OrderEventName> = {
   cancelled: {},
 }
 
-/** The state that `resume` leads back to: the one the order was held in. */
-export function resumedState(heldFrom: OrderStateName): OrderStateName {
-  return heldFrom
-}
 
 /** Whether moulding of this order may be cut: only after the first-off was accepted (or passed over, with a reason). */
 export function isFirstOffSettled(state: OrderStateName): boolean {
