@@ -1,2 +1,2 @@
-export { RIGHTS, can, clientIdsOf, isOfWorkshop, millIdsOf } from './rights'
+export { RIGHTS, can, clientIdsOf, isEverGranted, isOfWorkshop, millIdsOf } from './rights'
 export type { Actor, Facts, Right, RoleOfPerson } from './rights'

@@ -108,6 +108,12 @@ export function can(actor: Actor, right: Right, facts: Facts = {}): boolean {
   })
 }
 
+/** Whether any membership of the actor bears the right at all, for some row or other: what a door asks before it opens. */
+export function isEverGranted(actor: Actor, right: Right): boolean {
+  const grants: Grants = GRANTS[right]
+  return actor.memberships.some(({ role }) => grants[role] !== undefined)
+}
+
 function ruleHolds(
   rule: Rule,
   actor: Actor,

@@ -29,6 +29,18 @@ export {
 } from './section'
 export type { LengthSchema } from './section'
 export { pointerOf, faultsOf } from './faults'
+export { invalid, requireValid } from './contract'
+export type { Contract, OutputOf } from './contract'
+export {
+  Nothing,
+  IdParams,
+  CommissionListQuery,
+  ListQuery,
+  ImageQuery,
+  HealthAnswer,
+  ReadyAnswer,
+  FaultAnswer,
+} from './params'
 export {
   SignInRequest,
   FirstManagerRequest,

@@ -1,0 +1,29 @@
+import { z } from 'zod'
+import { Stage } from './commissions'
+import { Id } from './scalars'
+
+/** What stands in a path or after its question mark. */
+
+/** For what takes nothing there. */
+export const Nothing = z.strictObject({})
+export const IdParams = z.strictObject({ id: Id })
+export const CommissionListQuery = z.strictObject({
+  state: z.enum(['open', 'archived', 'all']).default('open'),
+  clientId: Id.optional(),
+  stage: Stage.optional(),
+  /** Words sought in number, title, artist, accession number and client. */
+  find: z.string().trim().max(200).optional(),
+})
+export const ListQuery = z.strictObject({ state: z.enum(['active', 'archived', 'all']).default('active') })
+export const ImageQuery = z.strictObject({ size: z.enum(['screen', 'thumb']).default('screen') })
+
+export const HealthAnswer = z.strictObject({ alive: z.literal(true) })
+export const ReadyAnswer = z.strictObject({ ready: z.literal(true) })
+export const FaultAnswer = z.strictObject({
+  error: z.looseObject({
+    code: z.string(),
+    says: z.string(),
+    faults: z.array(z.strictObject({ path: z.string(), code: z.string(), says: z.string() })).optional(),
+  }),
+  requestId: z.string(),
+})
