@@ -1,0 +1,62 @@
+/** Plane geometry: millimetres and radians as plain numbers, y up, counter-clockwise positive. Nothing is flattened unless said. */
+export type {
+  ArcSegment,
+  CubicSegment,
+  EllipseSegment,
+  LineSegment,
+  Outline,
+  Path,
+  Point,
+  Segment,
+} from './segment'
+export {
+  add,
+  angleOf,
+  between,
+  cross,
+  directionFrom,
+  distance,
+  distanceSquared,
+  dot,
+  isSamePoint,
+  leftOf,
+  magnitudeOf,
+  minus,
+  pointFrom,
+  rotated,
+  scaled,
+  unitOf,
+  wrappedTurn,
+} from './point'
+export {
+  arcFromBulge,
+  arcFromCentre,
+  arcFromSweep,
+  cubicFrom,
+  ellipseFrom,
+  lineFrom,
+  quarterEllipseFrom,
+} from './make'
+export type { EllipseShape } from './make'
+export { arcGeometryOf, arcLengthOf, radiusOf, sweepOf } from './arc'
+export type { ArcGeometry } from './arc'
+export {
+  bendOf,
+  curvatureAt,
+  derivativeAt,
+  endTangentOf,
+  pointAt,
+  secondDerivativeAt,
+  startTangentOf,
+  tangentAt,
+} from './evaluate'
+export { areaMomentsOf, signedAreaOf } from './moments'
+export type { AreaMoments } from './moments'
+export { lengthOf, lineMomentsOf, segmentLengthOf } from './length'
+export type { LengthOptions, LineMoments } from './length'
+export { boundsOf, extremaOf } from './bounds'
+export type { Axis, Bounds } from './bounds'
+export { mirrored, movedBy, reversed, reversedSegment, scaledBy, turnedBy } from './edit'
+export { cutAt, monotonePiecesOf, parametersAt, pathSplitAtX, splitAt, splitAtX, subSegment } from './split'
+export { isSingleValuedInX } from './single-valued'
+export { flattened } from './flatten'
