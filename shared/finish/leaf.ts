@@ -47,7 +47,7 @@ export function leafPlanFor(stretch: GildedStretch, leaf: Leaf): LeafPlan {
 }
 
 /** The least whole number not below a count, forgiving the last digits of a binary quotient. */
-const wholeUp = (count: number) => Math.ceil(count - ROUNDING * Math.max(1, count))
+const wholeUp = (count: number) => Math.max(0, Math.ceil(count - ROUNDING * Math.max(1, count)))
 
 const stretchFaults = ({ girthMm, totalRailLengthMm }: GildedStretch): Fault[] => [
   ...faultUnless(isLength(girthMm), '/girth', `The girth is ${girthMm} mm; it must be 0 mm or more.`),

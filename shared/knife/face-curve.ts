@@ -30,19 +30,13 @@ export function turnsOf(segment: Segment): number[] {
 /** A turn nearer than this to an end, as a share of the segment, is that end. */
 const END_PARAMETER = 1e-9
 
-/** The point of a segment at t, its stored ends at 0 and 1, so that neighbours agree to the last digit. */
-export function pointOf(segment: Segment, t: number): Point {
-  if (t === 0) return segment.start
-  return t === 1 ? segment.end : pointAt(segment, t)
-}
-
 /** Extent of a face; an empty one is Failure 'input-invalid'. */
 export function faceExtentOf(face: Path): FaceExtent {
   if (face.length === 0) {
     const says = 'The face has no members; put in at least one before asking for its knife.'
     throw new Failure('input-invalid', { says, faults: [{ path: '/members', code: 'empty', says }] })
   }
-  const points = face.flatMap((segment) => turnsOf(segment).map((t) => pointOf(segment, t)))
+  const points = face.flatMap((segment) => turnsOf(segment).map((t) => pointAt(segment, t)))
   const xs = points.map(({ x }) => x)
   const ys = points.map(({ y }) => y)
   return {
@@ -64,12 +58,12 @@ export function knifeCurveOf(segment: Segment, extent: FaceExtent, head: KnifeHe
   const riseOf = ({ y }: Point) => y - extent.leastY
   return {
     pointAt: (t) => {
-      const point = pointOf(segment, t)
+      const point = pointAt(segment, t)
       return { x: mirroredX(point.x), y: faceHeightAt(head, riseOf(point)) }
     },
     tangentAt: (t) => {
       const along = tangentAt(segment, t)
-      const riseMm = riseOf(pointOf(segment, t))
+      const riseMm = riseOf(pointAt(segment, t))
       // ds/dy = r/√(r² − e²), multiplied through so that a root near 0 does not divide.
       const x = -along.x * alongFaceAt(head, riseMm)
       const y = along.y * (head.cuttingRadiusMm - riseMm)

@@ -1,13 +1,11 @@
 import type { Path, Segment } from '@shared/geometry'
+import { KNIFE_OUTLINE_MM } from '@shared/units'
 import { arcsWithin, isArcOrLine } from './arc-fit'
 import type { ArcOrLine } from './arc-fit'
 import { faceDepthOf, faceExtentOf, knifeCurveOf, mirroredX, turnsOf } from './face-curve'
 import type { FaceExtent } from './face-curve'
 import { faceOffsetOf, findDepthRefusal } from './head'
 import type { DepthRefused, KnifeHead } from './head'
-
-/** The corrected outline lies within this of the true edge, mm. */
-export const OUTLINE_ACCURACY_MM = 0.01
 
 /** Stands on every drawing of the corrected outline. */
 export const CORRECTED_NOTE = 'already corrected for the hook; not a template'
@@ -22,7 +20,7 @@ export interface CorrectedOutline {
   readonly note: typeof CORRECTED_NOTE
 }
 
-/** The edge that cuts a wood face, corrected for the hook, within OUTLINE_ACCURACY_MM; refused where the head cannot cut it. */
+/** The edge that cuts a wood face, corrected for the hook, within KNIFE_OUTLINE_MM; refused where the head cannot cut it. */
 export function correctedOutline(face: Path, head: KnifeHead): CorrectedOutline | DepthRefused {
   const extent = faceExtentOf(face)
   const refusal = findDepthRefusal(head, faceDepthOf(extent))
@@ -35,7 +33,7 @@ function edgeOf(segment: Segment, extent: FaceExtent, head: KnifeHead): ArcOrLin
   if (faceOffsetOf(head) === 0 && isArcOrLine(segment)) return [mirroredEdge(segment, extent)]
   const curve = knifeCurveOf(segment, extent, head)
   const turns = turnsOf(segment)
-  return turns.slice(1).flatMap((to, index) => arcsWithin(curve, turns[index] ?? 0, to, OUTLINE_ACCURACY_MM))
+  return turns.slice(1).flatMap((to, index) => arcsWithin(curve, turns[index] ?? 0, to, KNIFE_OUTLINE_MM))
 }
 
 /** Without hook the knife is the section's own mirror: lines stay lines, arcs stay arcs. */

@@ -1,12 +1,11 @@
+import { pointAt } from '@shared/geometry'
 import type { Path, Point, Segment } from '@shared/geometry'
+import { KNIFE_TABLE_MM } from '@shared/units'
 import { findDepthRefusal } from './head'
 import type { DepthRefused, KnifeHead } from './head'
-import { faceDepthOf, faceExtentOf, pointOf, turnsOf } from './face-curve'
+import { faceDepthOf, faceExtentOf, turnsOf } from './face-curve'
 import type { FaceExtent } from './face-curve'
 import { faceHeightAt } from './face-depth'
-
-/** Straight lines between neighbouring rows leave the true outline by at most this, mm, on the wood and on the knife. */
-export const TABLE_ACCURACY_MM = 0.05
 
 /** One place of the knife table, mm. */
 export interface KnifeRow {
@@ -21,7 +20,7 @@ export type KnifeTable = { readonly kind: 'table'; readonly rows: readonly Knife
 
 /**
  * The knife as a table in face order, from the sight edge outward: a row at every joint of the face (hence at every break),
- * at every place where it turns in x or y, and as many between as keep straight lines within TABLE_ACCURACY_MM.
+ * at every place where it turns in x or y, and as many between as keep straight lines within KNIFE_TABLE_MM.
  */
 export function knifeTable(face: Path, head: KnifeHead): KnifeTable {
   const extent = faceExtentOf(face)
@@ -29,7 +28,7 @@ export function knifeTable(face: Path, head: KnifeHead): KnifeTable {
   if (refusal !== undefined) return refusal
   const rowOf = (point: Point) => rowAt(point, extent, head)
   const rows = face.flatMap((segment, index) => {
-    const points = parametersOf(segment, rowOf).map((t) => pointOf(segment, t))
+    const points = parametersOf(segment, rowOf).map((t) => pointAt(segment, t))
     return (index === 0 ? points : points.slice(1)).map(rowOf)
   })
   return { kind: 'table', rows }
@@ -49,7 +48,7 @@ function parametersOf(segment: Segment, rowOf: (point: Point) => KnifeRow): numb
   const parameters = [0]
   turns.slice(1).forEach((to, index) => {
     const from = turns[index] ?? 0
-    const steps = stepsWithin((t) => rowOf(pointOf(segment, t)), from, to)
+    const steps = stepsWithin((t) => rowOf(pointAt(segment, t)), from, to)
     for (let step = 1; step < steps; step += 1) parameters.push(from + ((to - from) * step) / steps)
     parameters.push(to)
   })
@@ -63,7 +62,7 @@ const MOST_STEPS = 100_000
 
 /** Least number of equal steps whose chords keep within the accuracy, both as depth and as height on the knife. */
 function stepsWithin(rowAtParameter: (t: number) => KnifeRow, from: number, to: number): number {
-  const allowed = TABLE_ACCURACY_MM * SAMPLING_SHARE
+  const allowed = KNIFE_TABLE_MM * SAMPLING_SHARE
   let steps = 1
   while (steps < MOST_STEPS) {
     let worst = 0

@@ -7,8 +7,8 @@ export interface Climate {
   readonly humidityPercent: number
 }
 
-/** The temperatures that the published table of equilibrium moisture covers (Table 4-2), °C. */
-export const EMC_TEMPERATURES_C = { least: -1.1, greatest: 132.2 } as const
+/** The temperatures that the published table of equilibrium moisture covers (Table 4-2): 30 to 270 °F, in °C. */
+export const EMC_TEMPERATURES_C = { least: -10 / 9, greatest: 1190 / 9 } as const
 /** The humidities that the published table covers, per cent; beyond them the equation still answers. */
 export const EMC_HUMIDITIES_PERCENT = { least: 5, greatest: 95 } as const
 
@@ -33,7 +33,7 @@ function refuseClimate(temperatureC: number, humidityPercent: number): void {
   if (!(temperatureC >= least && temperatureC <= greatest)) {
     refuse(
       '/temperature',
-      `The temperature is ${temperatureC} °C; the published moisture table runs from ${least} to ${greatest} °C, give one between them.`,
+      `The temperature is ${temperatureC} °C; the published moisture table runs from ${least.toFixed(1)} to ${greatest.toFixed(1)} °C, give one between them.`,
     )
   }
   if (!(humidityPercent >= 0 && humidityPercent <= 100)) {
