@@ -74,7 +74,6 @@ export const ORDER_COURSE: Course<OrderStateName, OrderEventName> = {
   cancelled: {},
 }
 
-
 /** Whether moulding of this order may be cut: only after the first-off was accepted (or passed over, with a reason). */
 export function isFirstOffSettled(state: OrderStateName): boolean {
   return (
