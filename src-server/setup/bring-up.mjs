@@ -1,13 +1,13 @@
 import { openDataFolder, readRecord } from './data-folder.mjs'
 import { ensureBuild } from './build.mjs'
 import { ensureContents } from './contents.mjs'
+import { USUAL_PORTS, environmentFor } from './environment.mjs'
 import { keyOfDatabase, openInstallation } from './installation.mjs'
 import { forgetChildren, rememberChildren, stopLeftovers } from './leftovers.mjs'
 import { ensureDatabase, initialiseMariaDb, startMariaDb } from './mariadb.mjs'
 import { ensurePackages } from './packages.mjs'
-import { firstFreePort, isPortFree } from './ports.mjs'
+import { firstFreePort } from './ports.mjs'
 import {
-  addressOf,
   addressesForOthers,
   answersWell,
   isListening,
@@ -19,8 +19,6 @@ import {
 import { Refusal, say } from './say.mjs'
 import { ROOT } from './settings.mjs'
 import { MARIADB, ensurePrograms } from './system-programs.mjs'
-
-const PORTS = { application: 4700, mail: 4725, database: 4733, client: 4780 }
 
 /**
  * Brings the whole product up and tells where it is. `onOpen` receives what is to be called once everything
@@ -46,7 +44,7 @@ export async function bringUp(settings, { onOpen }) {
   await ensurePackages(ROOT)
   const context = { settings, data, installation, stays }
   const [database] = await Promise.all([openDatabase(context), build(settings)])
-  const env = await environmentFor(context, database)
+  const env = await environmentFor(context, database.url)
   await ensureContents({ ...context, database, env })
   const address = await startApplication(context, env)
   data.note({ address })
@@ -71,7 +69,7 @@ async function openDatabase({ settings, data, installation, stays }) {
   const log = data.at('logs', 'mariadb.log')
   const folder = data.at('mariadb')
   if (await initialiseMariaDb({ folder, log })) installation.keepContents(key, undefined)
-  const port = await firstFreePort([installation.record.databasePort, PORTS.database])
+  const port = await firstFreePort([installation.record.databasePort, USUAL_PORTS.database])
   installation.keep({ databasePort: port })
   const server = await startMariaDb({ folder, port, log, onStart: stays })
   const account = { name: 'listel', user: 'listel', password: installation.secret('databasePassword') }
@@ -83,40 +81,6 @@ async function openDatabase({ settings, data, installation, stays }) {
 async function remake(server, account) {
   await server.run(`DROP DATABASE ${account.name}`)
   await ensureDatabase(server, account)
-}
-
-/** The environment of every program: given settings as they are, the rest from the installation. */
-async function environmentFor({ settings, data, installation }, database) {
-  const { record } = installation
-  const port = settings.port ?? (await firstFreePort([record.port, PORTS.application], settings.host))
-  if (!(await isPortFree(port, settings.host))) {
-    throw new Refusal(
-      `Port ${port} at ${settings.host} is taken or not allowed; give another in LISTEL_PORT.`,
-    )
-  }
-  if (settings.port === undefined) installation.keep({ port })
-  const own = {
-    NODE_ENV: settings.isDev ? 'development' : 'production',
-    LISTEL_HOST: settings.host,
-    LISTEL_PORT: String(port),
-    LISTEL_DATA: data.path,
-    LISTEL_CLIENT_DIR: `${settings.buildFolder}/client`,
-    LISTEL_DATABASE_URL: database.url,
-    LISTEL_SECRET: settings.secret ?? installation.secret('secret'),
-    LISTEL_API: addressOf(settings.host, port),
-  }
-  return { ...process.env, ...own, ...(await mailEnvironment({ settings, data, installation })) }
-}
-
-async function mailEnvironment({ settings, data, installation }) {
-  if (settings.smtpUrl !== undefined) return { LISTEL_SMTP_URL: settings.smtpUrl }
-  const port = await firstFreePort([installation.record.smtpPort, PORTS.mail])
-  installation.keep({ smtpPort: port })
-  return {
-    LISTEL_SMTP_PORT: String(port),
-    LISTEL_SMTP_URL: `smtp://127.0.0.1:${port}`,
-    LISTEL_CAUGHT_MAIL_DIR: data.at('caught-mail'),
-  }
 }
 
 /** Starts the mail catcher, unless letters go elsewhere, and the application; gives its address. */
@@ -131,7 +95,7 @@ async function startApplication({ settings, data, stays }, env) {
   const application = stays(startProgram('main', settings, { title: 'application', env, log }))
   await waitFor(application, () => answersWell(`${env.LISTEL_API}/api/ready`), { log })
   if (!settings.isDev) return env.LISTEL_API
-  const port = await firstFreePort([PORTS.client])
+  const port = Number(env.LISTEL_CLIENT_PORT)
   const clientLog = data.at('logs', 'client.log')
   const client = stays(startClientServer({ env, log: clientLog, port }))
   await waitFor(client, () => answersWell(`http://127.0.0.1:${port}/`), { log: clientLog })

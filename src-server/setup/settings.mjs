@@ -23,9 +23,10 @@ export function readSettings(args, env) {
     port: portFrom('LISTEL_PORT', given('LISTEL_PORT')),
     dataFolder: resolve(given('LISTEL_DATA') ?? join(ROOT, '.data')),
     buildFolder: resolve(given('LISTEL_BUILD') ?? join(ROOT, 'dist')),
-    databaseUrl: urlFrom('LISTEL_DATABASE_URL', given('LISTEL_DATABASE_URL'), ['mariadb:', 'mysql:']),
+    databaseUrl: urlFrom('LISTEL_DATABASE_URL', given('LISTEL_DATABASE_URL'), ['mariadb:']),
     smtpUrl: urlFrom('LISTEL_SMTP_URL', given('LISTEL_SMTP_URL'), ['smtp:', 'smtps:']),
-    secret: given('LISTEL_SECRET'),
+    publicUrl: urlFrom('LISTEL_PUBLIC_URL', given('LISTEL_PUBLIC_URL'), ['http:', 'https:']),
+    secret: secretFrom('LISTEL_SECRET', given('LISTEL_SECRET')),
     wantsDemo: yesOrNo('LISTEL_DEMO', given('LISTEL_DEMO')),
   }
   requireReset(settings)
@@ -72,6 +73,11 @@ function urlFrom(name, text, schemes) {
   if (text === undefined) return undefined
   if (URL.canParse(text) && schemes.includes(new URL(text).protocol)) return text
   throw new Refusal(`${name} must be an address that begins with ${schemes[0]}// .`)
+}
+
+function secretFrom(name, text) {
+  if (text === undefined || text.length >= 32) return text
+  throw new Refusal(`${name} must be at least 32 characters.`)
 }
 
 function yesOrNo(name, text) {

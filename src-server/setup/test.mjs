@@ -92,7 +92,9 @@ async function runTests(args, env) {
 
 /** A running product's settings in the caller's environment must not reach the tests. */
 function cleanEnvironment() {
-  return Object.fromEntries(Object.entries(process.env).filter(([name]) => !name.startsWith('LISTEL_') && name !== 'NODE_ENV'))
+  return Object.fromEntries(
+    Object.entries(process.env).filter(([name]) => !name.startsWith('LISTEL_') && name !== 'NODE_ENV'),
+  )
 }
 
 async function main() {
