@@ -60,3 +60,27 @@ export { mirrored, movedBy, reversed, reversedSegment, scaledBy, turnedBy } from
 export { cutAt, monotonePiecesOf, parametersAt, pathSplitAtX, splitAt, splitAtX, subSegment } from './split'
 export { isSingleValuedInX } from './single-valued'
 export { flattened } from './flatten'
+export { intersectionsOf } from './intersect'
+export type { Meeting } from './intersect'
+export { pathIntersectionsOf, selfCrossingsOf } from './crossings'
+export type { PathMeeting } from './crossings'
+export { nearestOnPath, nearestOnSegment } from './nearest'
+export type { NearestOnPath, NearestOnSegment } from './nearest'
+export { greatestDistanceBetween } from './greatest-distance'
+export type { GreatestDistance } from './greatest-distance'
+export { arcsFromCurve } from './biarc'
+export { offsetSegment } from './offset'
+export {
+  differenceOf,
+  intersectionOf,
+  offsetPolygon,
+  polygonAreaOf,
+  simplified,
+  symmetricDifferenceArea,
+  symmetricDifferenceOf,
+  unionOf,
+} from './polygons'
+export type { OffsetPolygonOptions, Polygon } from './polygons'
+export { convexHullOf } from './hull'
+export { enclosingRectangleAt, extentAlong, smallestEnclosingRectangleOf } from './enclosing-rectangle'
+export type { EnclosingRectangle, Extent } from './enclosing-rectangle'
