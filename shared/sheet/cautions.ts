@@ -1,3 +1,4 @@
+import { KNIFE_CAUTIONS } from '@shared/knife'
 import { wordOf } from '@shared/units'
 import type { SheetInput } from './sheet-input'
 
@@ -13,7 +14,7 @@ export function standingCautions({ vocabulary, section }: SheetInput, scaleText:
     section.gesso === 0
       ? 'The face is bare wood: what is drawn wide is what is cut.'
       : 'Cut the wood face, drawn wide. The narrow line beside it is the finished face after gesso and leaf.',
-    'Not corrected for the hook of the knife: the grinder allows for it.',
-    `Knives are balanced, clamped and set by a competent person, and the marked speed of the ${wordOf(vocabulary, 'cutter-block')} is never exceeded. The maker's data, local rules and the mill's own licensed practice come before anything on this sheet.`,
+    'Nothing here is corrected for the hook of the knife.',
+    ...KNIFE_CAUTIONS,
   ]
 }

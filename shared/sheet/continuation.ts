@@ -8,7 +8,7 @@ import { drawingSpaceOf, PAPERS, TITLE_BLOCK_WIDTH_MM } from './paper-sizes'
 import type { Paper } from './paper-sizes'
 import type { SheetInput } from './sheet-input'
 import { LONGEST_NOTE } from './sheet-notes'
-import { titleBlockHeightMm } from './title-block'
+import { TITLE_BLOCK_HEIGHT_MM } from './title-block'
 
 /** A sheet after the first, its title block still to come. */
 export interface FurtherPage {
@@ -37,7 +37,7 @@ function tablePages(input: SheetInput, rows: readonly MemberRow[]): FurtherPage[
   if (rows.length === 0) return []
   const columnsOn = (paper: Paper) => {
     const { left, right, top, bottom } = drawingSpaceOf(paper)
-    const aboveTitle = rowsThatFit(top - bottom - INSET_MM - titleBlockHeightMm - GAP_MM)
+    const aboveTitle = rowsThatFit(top - bottom - INSET_MM - TITLE_BLOCK_HEIGHT_MM - GAP_MM)
     const last = { x: right - TITLE_BLOCK_WIDTH_MM, rows: aboveTitle }
     return paper.name === 'A4' ? [last] : [{ x: left + INSET_MM, rows: aboveTitle }, last]
   }
@@ -62,13 +62,19 @@ function notePages(notes: string): FurtherPage[] {
   const x = left + INSET_MM
   const lines = wrappedLines(notes, right - INSET_MM - x, LETTER_MM.small)
   const start = top - INSET_MM - HEADING_MM
-  const perPage = Math.floor((start - bottom - titleBlockHeightMm - GAP_MM) / LINE_MM)
+  const perPage = Math.floor((start - bottom - TITLE_BLOCK_HEIGHT_MM - GAP_MM) / LINE_MM)
   return Array.from({ length: Math.ceil(lines.length / perPage) }, (_, page) => ({
     paper,
     items: [
-      textItem('notes', { x, y: top - INSET_MM - LETTER_MM.dimension }, 'Notes to the mill', LETTER_MM.dimension, {
-        weight: 'semibold',
-      }),
+      textItem(
+        'notes',
+        { x, y: top - INSET_MM - LETTER_MM.dimension },
+        'Notes to the mill',
+        LETTER_MM.dimension,
+        {
+          weight: 'semibold',
+        },
+      ),
       ...lines.slice(page * perPage, (page + 1) * perPage).flatMap((line, index) => {
         const y = start - LETTER_MM.small - index * LINE_MM
         return line === '' ? [] : [textItem('notes', { x, y }, line, LETTER_MM.small)]

@@ -10,6 +10,7 @@ export type Layer =
   | 'wood'
   | 'finished-face'
   | 'rebate'
+  | 'knife'
   | 'dimensions'
   | 'labels'
   | 'hatching'
@@ -18,7 +19,7 @@ export type Layer =
   | 'table'
   | 'notes'
 
-export const MODEL_LAYERS = ['wood', 'finished-face', 'rebate', 'dimensions', 'labels'] as const
+export const MODEL_LAYERS = ['wood', 'finished-face', 'rebate', 'knife', 'dimensions', 'labels'] as const
 export type ModelLayer = (typeof MODEL_LAYERS)[number]
 
 /** ink is black; grey and pale are for what must not compete with it (hatching, waste, tints). */
@@ -27,7 +28,10 @@ export type Tone = 'ink' | 'grey' | 'pale' | 'white'
 export type Dash = 'solid' | 'dashed'
 
 /** Dash and gap of a dashed line, mm: 12 and 3 line widths (ISO 128-2:2020). */
-export const dashPattern = (lineWidthMm: number): readonly [number, number] => [12 * lineWidthMm, 3 * lineWidthMm]
+export const dashPattern = (lineWidthMm: number): readonly [number, number] => [
+  12 * lineWidthMm,
+  3 * lineWidthMm,
+]
 
 /** Line widths, mm, from the series of ISO 128-2:2020 (wide to narrow at least 2:1); the frame line by ISO 5457. */
 export const LINE_WIDTH_MM = { wide: 0.5, narrow: 0.25, fine: 0.18, frame: 0.7 } as const

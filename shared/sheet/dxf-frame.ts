@@ -12,6 +12,7 @@ export const DXF_LAYERS: Record<ModelLayer, { readonly name: string; readonly wi
   wood: { name: 'WOOD', width: 50 },
   'finished-face': { name: 'FINISHED_FACE', width: 25 },
   rebate: { name: 'REBATE', width: 50 },
+  knife: { name: 'KNIFE_CORRECTED', width: 50 },
   dimensions: { name: 'DIMENSIONS', width: 25 },
   labels: { name: 'TEXT', width: 25 },
 }

@@ -2,7 +2,15 @@ import { assertNever, Failure } from '@shared/failure'
 import { arcGeometryOf, arcsFromCurve, boundsOf } from '@shared/geometry'
 import type { ArcSegment, LineSegment, Path, Point } from '@shared/geometry'
 import { LETTER_MM, MODEL_LAYERS } from './drawing'
-import type { Drawing, DrawingItem, LinesItem, ModelLayer, ModelPlacement, PathItem, TextItem } from './drawing'
+import type {
+  Drawing,
+  DrawingItem,
+  LinesItem,
+  ModelLayer,
+  ModelPlacement,
+  PathItem,
+  TextItem,
+} from './drawing'
 import { blocksSection, DXF_LAYERS, headerSection, objectsSection, tablesSection } from './dxf-frame'
 import type { Extents } from './dxf-frame'
 import { dxfText, handleSource, recordsText } from './dxf-records'
@@ -22,7 +30,9 @@ const NOTES_GAP_MM = 8
 export function dxfOf(drawing: Drawing): string {
   const { model } = drawing
   if (model === undefined) {
-    throw new Failure('input-invalid', { says: 'this page holds no drawing to scale, so there is no DXF of it' })
+    throw new Failure('input-invalid', {
+      says: 'this page holds no drawing to scale, so there is no DXF of it',
+    })
   }
   const handle = handleSource()
   const spaces = { model: handle(), paper: handle() }
@@ -85,7 +95,8 @@ function extentsOf(items: readonly ModelItem[]): Extents {
         return assertNever(item)
     }
   })
-  if (points.length === 0) throw new Failure('input-invalid', { says: 'this page holds no section to write as DXF' })
+  if (points.length === 0)
+    throw new Failure('input-invalid', { says: 'this page holds no section to write as DXF' })
   const xs = points.map(({ x }) => x)
   const ys = points.map(({ y }) => y)
   return {
@@ -250,7 +261,13 @@ function textEntity(item: TextItem & { layer: ModelLayer }, write: Writing): Pai
     [50, degreesOf(item.rotationRad)],
     [7, 'Standard'],
     [72, justified],
-    ...(justified === 0 ? [] : ([[11, item.at.x], [21, item.at.y], [31, 0]] as const)),
+    ...(justified === 0
+      ? []
+      : ([
+          [11, item.at.x],
+          [21, item.at.y],
+          [31, 0],
+        ] as const)),
     [100, 'AcDbText'],
   ]
 }

@@ -21,7 +21,9 @@ const ADVANCES: Record<Weight, ReadonlyMap<string, number>> = {
 
 function advancesFrom(table: string, spacePerEm: number): ReadonlyMap<string, number> {
   const widths = table.split(' ').map((thousandths) => Number(thousandths) / 1000)
-  const entries = [...CHARACTERS].map((character, index) => [character, widths[index] ?? WIDEST_PER_EM] as const)
+  const entries = [...CHARACTERS].map(
+    (character, index) => [character, widths[index] ?? WIDEST_PER_EM] as const,
+  )
   return new Map([...entries, [' ', spacePerEm], ['\u00a0', spacePerEm]])
 }
 
@@ -45,13 +47,22 @@ export function plainLine(text: string): string {
  * Text broken at spaces into lines no wider than widthMm; a word that is wider by itself is broken inside.
  * Line breaks in the text are kept.
  */
-export function wrappedLines(text: string, widthMm: number, heightMm: number, weight: Weight = 'regular'): string[] {
-  return text.split(/\r\n|[\n\r]/).flatMap((line) => wrappedParagraph(plainLine(line), widthMm, heightMm, weight))
+export function wrappedLines(
+  text: string,
+  widthMm: number,
+  heightMm: number,
+  weight: Weight = 'regular',
+): string[] {
+  return text
+    .split(/\r\n|[\n\r]/)
+    .flatMap((line) => wrappedParagraph(plainLine(line), widthMm, heightMm, weight))
 }
 
 function wrappedParagraph(text: string, widthMm: number, heightMm: number, weight: Weight): string[] {
   if (widthMm < emOf(heightMm) * WIDEST_PER_EM) {
-    throw new Failure('input-invalid', { says: `no letter ${heightMm} mm high fits a width of ${widthMm} mm` })
+    throw new Failure('input-invalid', {
+      says: `no letter ${heightMm} mm high fits a width of ${widthMm} mm`,
+    })
   }
   const lines: string[] = []
   let line = ''
@@ -81,11 +92,17 @@ function brokenWord(word: string, widthMm: number, heightMm: number, weight: Wei
 }
 
 /** Text cut to a width, the cut shown by an ellipsis. */
-export function cutToWidth(text: string, widthMm: number, heightMm: number, weight: Weight = 'regular'): string {
+export function cutToWidth(
+  text: string,
+  widthMm: number,
+  heightMm: number,
+  weight: Weight = 'regular',
+): string {
   const plain = plainLine(text)
   if (textWidthMm(plain, heightMm, weight) <= widthMm) return plain
   const characters = [...plain]
-  while (characters.length > 0 && textWidthMm(`${characters.join('')}…`, heightMm, weight) > widthMm) characters.pop()
+  while (characters.length > 0 && textWidthMm(`${characters.join('')}…`, heightMm, weight) > widthMm)
+    characters.pop()
   return `${characters.join('').trimEnd()}…`
 }
 

@@ -49,7 +49,10 @@ export function memberLabelsAbove(labels: readonly MemberLabel[], limit: number)
   const legs = labels
     .map((label) => ({ ...label, entry: entryOf(label) }))
     .sort((a, b) => a.entry.x - b.entry.x)
-  const places = spreadApart(legs.map(({ entry }) => entry.x), PITCH_MM)
+  const places = spreadApart(
+    legs.map(({ entry }) => entry.x),
+    PITCH_MM,
+  )
   const greatest = Math.max(0, ...legs.map(({ entry }, index) => Math.abs((places[index] ?? 0) - entry.x)))
   const slant = greatest < 0.05 ? 0 : Math.max(LEAST_SLANT_MM, greatest * SLANT_PER_SHIFT)
   const knee = limit + CLEAR_MM
@@ -95,6 +98,10 @@ function arrowhead({ target, toward }: MemberLabel): DrawingItem {
     x: target.x - toward.x * distance - toward.y * aside,
     y: target.y - toward.y * distance + toward.x * aside,
   })
-  const corners = [target, along(ARROW_LENGTH_MM, ARROW_HALF_WIDTH_MM), along(ARROW_LENGTH_MM, -ARROW_HALF_WIDTH_MM)]
+  const corners = [
+    target,
+    along(ARROW_LENGTH_MM, ARROW_HALF_WIDTH_MM),
+    along(ARROW_LENGTH_MM, -ARROW_HALF_WIDTH_MM),
+  ]
   return pathItem('labels', polygonPath(corners), 0, { closed: true, fill: 'ink' })
 }

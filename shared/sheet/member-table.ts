@@ -45,7 +45,16 @@ export function memberRowsOf(section: Section, vocabulary: Vocabulary, printer: 
     return at === undefined ? ['–', '–'] : [printer.length(at.x), printer.length(at.y)]
   }
   const sightBasis = basisText(section.basis?.sightEdgeHeight, printer)
-  const sight = ['0', 'sight edge', '–', '', printer.length(section.sightEdgeHeight), sightBasis, ...place(0), '–']
+  const sight = [
+    '0',
+    'sight edge',
+    '–',
+    '',
+    printer.length(section.sightEdgeHeight),
+    sightBasis,
+    ...place(0),
+    '–',
+  ]
   const rows = section.members.map((member, index) => [
     `${index + 1}`,
     kindText(member.kind, vocabulary),
@@ -54,15 +63,22 @@ export function memberRowsOf(section: Section, vocabulary: Vocabulary, printer: 
     signed(member.rise, printer),
     member.rise === 0 ? '' : basisText(member.basis?.rise, printer),
     ...place(index + 1),
-    curveText(member, path.filter((_, at) => memberOf[at] === index), gessoOver(section, index), printer),
+    curveText(
+      member,
+      path.filter((_, at) => memberOf[at] === index),
+      gessoOver(section, index),
+      printer,
+    ),
   ])
   return [sight, ...rows]
 }
 
-const signed = (mm: number, printer: LengthPrinter): string => (mm > 0 ? `+${printer.length(mm)}` : printer.length(mm))
+const signed = (mm: number, printer: LengthPrinter): string =>
+  mm > 0 ? `+${printer.length(mm)}` : printer.length(mm)
 
 /** How many rows a table of this height takes. */
-export const rowsThatFit = (heightMm: number): number => Math.max(0, Math.floor((heightMm - HEADING_MM) / ROW_MM))
+export const rowsThatFit = (heightMm: number): number =>
+  Math.max(0, Math.floor((heightMm - HEADING_MM) / ROW_MM))
 
 export const tableHeightMm = (rowCount: number): number => HEADING_MM + rowCount * ROW_MM
 
@@ -72,7 +88,11 @@ export function memberTable(rows: readonly MemberRow[], title: string, hasGesso:
   const items: DrawingItem[] = [
     textItem('table', { x: 0, y: -LETTER_MM.dimension }, title, LETTER_MM.dimension, { weight: 'semibold' }),
     ...groupHeadings(hasGesso),
-    ...rowItems(COLUMNS.map(({ heading }) => heading), -HEADING_MM + ROW_MM, 'semibold'),
+    ...rowItems(
+      COLUMNS.map(({ heading }) => heading),
+      -HEADING_MM + ROW_MM,
+      'semibold',
+    ),
     ...rows.flatMap((row, index) => rowItems(row, -HEADING_MM - index * ROW_MM, 'regular')),
     linesItem('table', tableRules(rows.length), LINE_WIDTH_MM.fine, { tone: 'grey' }),
     linesItem('table', [across(-HEADING_MM), across(-heightMm)], LINE_WIDTH_MM.narrow),
@@ -103,9 +123,15 @@ function rowItems(cells: MemberRow, top: number, weight: 'regular' | 'semibold')
   })
 }
 
-const across = (y: number) => [{ x: 0, y }, { x: TABLE_WIDTH_MM, y }] as const
+const across = (y: number) =>
+  [
+    { x: 0, y },
+    { x: TABLE_WIDTH_MM, y },
+  ] as const
 
 /** A hairline under every row but the last, which has a line of its own. */
 function tableRules(rowCount: number) {
-  return Array.from({ length: Math.max(0, rowCount - 1) }, (_, index) => across(-HEADING_MM - (index + 1) * ROW_MM))
+  return Array.from({ length: Math.max(0, rowCount - 1) }, (_, index) =>
+    across(-HEADING_MM - (index + 1) * ROW_MM),
+  )
 }

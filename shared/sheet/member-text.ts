@@ -54,7 +54,12 @@ export function radiiOf(segments: readonly Segment[]): number[] {
  * What the knife's grinder must know of a member's curve: the radii of its wood, or the words for one that is no arc.
  * `wood` are the member's segments on the wood face (none where the gesso fills it), `gessoMm` what lies over it.
  */
-export function curveText(member: Member, wood: readonly Segment[], gessoMm: number, printer: LengthPrinter): string {
+export function curveText(
+  member: Member,
+  wood: readonly Segment[],
+  gessoMm: number,
+  printer: LengthPrinter,
+): string {
   if (wood.length === 0) return 'filled by gesso'
   switch (member.kind) {
     case 'fillet':

@@ -78,11 +78,23 @@ export function checkBar(unit: LengthUnit): CheckBar {
     textItem('notes', { x: 0, y: -BAR_HEIGHT_MM - LETTER_MM.small - 1.4 }, text, LETTER_MM.small),
   ]
   const heightMm = BAR_HEIGHT_MM + LETTER_MM.small + 1.4 + 1
-  return { lengthMm, block: { widthMm: Math.max(lengthMm, textWidthMm(text, LETTER_MM.small)), heightMm, items } }
+  return {
+    lengthMm,
+    block: { widthMm: Math.max(lengthMm, textWidthMm(text, LETTER_MM.small)), heightMm, items },
+  }
 }
 
 /** A line across a block's top, to part it from what stands above. */
 export function ruleBlock(widthMm: number): Block {
-  const line = linesItem('notes', [[{ x: 0, y: 0 }, { x: widthMm, y: 0 }]], LINE_WIDTH_MM.fine)
+  const line = linesItem(
+    'notes',
+    [
+      [
+        { x: 0, y: 0 },
+        { x: widthMm, y: 0 },
+      ],
+    ],
+    LINE_WIDTH_MM.fine,
+  )
   return { widthMm, heightMm: LINE_WIDTH_MM.fine, items: [line] }
 }

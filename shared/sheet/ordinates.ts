@@ -41,7 +41,10 @@ export function ordinatesBeside(side: Side, ordinates: readonly Ordinate[], limi
   const at = (along: number, away: number): Point =>
     side === 'below' ? { x: along, y: away } : { x: away, y: along }
   const sorted = [...ordinates].sort((a, b) => axis(a.feature) - axis(b.feature))
-  const places = spreadApart(sorted.map(({ feature }) => axis(feature)), PITCH_MM)
+  const places = spreadApart(
+    sorted.map(({ feature }) => axis(feature)),
+    PITCH_MM,
+  )
   const shifts = sorted.map(({ feature }, index) => Math.abs((places[index] ?? 0) - axis(feature)))
   const greatest = Math.max(0, ...shifts)
   const slant = greatest < 0.05 ? 0 : Math.max(LEAST_SLANT_MM, greatest * SLANT_PER_SHIFT)
@@ -57,7 +60,9 @@ export function ordinatesBeside(side: Side, ordinates: readonly Ordinate[], limi
       [at(place, foot), at(place, end)],
     ] as const
   })
-  const texts = sorted.map(({ text }, index) => valueText(side, text, places[index] ?? 0, end + out * LETTER_GAP_MM))
+  const texts = sorted.map(({ text }, index) =>
+    valueText(side, text, places[index] ?? 0, end + out * LETTER_GAP_MM),
+  )
   const widest = Math.max(0, ...sorted.map(({ text }) => textWidthMm(text, LETTER_MM.dimension)))
   return {
     items: [linesItem('dimensions', lines, LINE_WIDTH_MM.fine, { tone: DIMENSION_TONE }), ...texts],

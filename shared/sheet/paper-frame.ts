@@ -11,13 +11,27 @@ export function paperFrame(paper: Pick<Paper, 'widthMm' | 'heightMm'>): DrawingI
   const { widthMm, heightMm } = paper
   const { left, bottom, right, top } = drawingSpaceOf(paper)
   const marks = [
-    [{ x: UNPRINTABLE_MM, y: heightMm / 2 }, { x: left, y: heightMm / 2 }],
-    [{ x: right, y: heightMm / 2 }, { x: widthMm - UNPRINTABLE_MM, y: heightMm / 2 }],
-    [{ x: widthMm / 2, y: UNPRINTABLE_MM }, { x: widthMm / 2, y: bottom }],
-    [{ x: widthMm / 2, y: top }, { x: widthMm / 2, y: heightMm - UNPRINTABLE_MM }],
+    [
+      { x: UNPRINTABLE_MM, y: heightMm / 2 },
+      { x: left, y: heightMm / 2 },
+    ],
+    [
+      { x: right, y: heightMm / 2 },
+      { x: widthMm - UNPRINTABLE_MM, y: heightMm / 2 },
+    ],
+    [
+      { x: widthMm / 2, y: UNPRINTABLE_MM },
+      { x: widthMm / 2, y: bottom },
+    ],
+    [
+      { x: widthMm / 2, y: top },
+      { x: widthMm / 2, y: heightMm - UNPRINTABLE_MM },
+    ],
   ] as const
   return [
-    pathItem('frame', rectanglePath(left, bottom, right - left, top - bottom), LINE_WIDTH_MM.frame, { closed: true }),
+    pathItem('frame', rectanglePath(left, bottom, right - left, top - bottom), LINE_WIDTH_MM.frame, {
+      closed: true,
+    }),
     linesItem('frame', marks, LINE_WIDTH_MM.frame),
   ]
 }

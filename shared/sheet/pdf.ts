@@ -24,7 +24,6 @@ const GREYS: Record<Tone, number> = { ink: 0, grey: 136, pale: 232, white: 255 }
 const POINTS_PER_MM = 72 / 25.4
 /** Widest stretch of a circle drawn as one cubic: at π/8 the cubic leaves the circle by less than 10⁻⁷ of its radius. */
 const WIDEST_CUBIC_RAD = Math.PI / 8
-const ROUND = 1
 
 /**
  * The pages as one PDF at true size: vector paths, selectable text in the embedded font, and a request to the viewer
@@ -38,10 +37,20 @@ export async function pdfOf(pages: readonly Drawing[], options: PdfOptions): Pro
     throw new Failure('input-invalid', { says: 'the file id must be 32 hexadecimal digits' })
   }
   const { jsPDF: Document } = await import('jspdf')
-  const document = new Document({ unit: 'mm', format: formatOf(first), orientation: orientationOf(first), compress: true })
+  const document = new Document({
+    unit: 'mm',
+    format: formatOf(first),
+    orientation: orientationOf(first),
+    compress: true,
+    putOnlyUsedFonts: true,
+  })
   document.setFileId(options.fileId.toUpperCase())
   document.setCreationDate(createdAt)
-  document.setProperties({ title: plainLine(options.title), author: plainLine(options.author), creator: 'Listel' })
+  document.setProperties({
+    title: plainLine(options.title),
+    author: plainLine(options.author),
+    creator: 'Listel',
+  })
   document.viewerPreferences({ PrintScaling: 'None' })
   for (const weight of ['regular', 'semibold'] as const) {
     document.addFileToVFS(`${FONT_FAMILY}-${weight}.ttf`, options.fonts[weight])
@@ -70,8 +79,8 @@ function pdfDateOf(instant: string): string {
 }
 
 function drawPage(document: jsPDF, page: Drawing): void {
-  document.setLineCap(ROUND)
-  document.setLineJoin(ROUND)
+  document.setLineCap('round')
+  document.setLineJoin('round')
   for (const item of page.items) drawItem(document, item, page.heightMm)
 }
 
@@ -147,7 +156,10 @@ function cubicsOf(segment: Exclude<Segment, { kind: 'line' }>): readonly Cubic[]
       return [[segment.control1, segment.control2, segment.end]]
     case 'arc': {
       const { centre, radius, startRad, sweepRad } = arcGeometryOf(segment)
-      return ellipseCubics({ centre, semiX: radius, semiY: radius, rotationRad: 0, startRad, sweepRad }, segment.end)
+      return ellipseCubics(
+        { centre, semiX: radius, semiY: radius, rotationRad: 0, startRad, sweepRad },
+        segment.end,
+      )
     }
     case 'ellipse':
       return ellipseCubics(segment, segment.end)
@@ -173,9 +185,21 @@ function ellipseCubics(shape: EllipseShape, end: Point): Cubic[] {
   return Array.from({ length: count }, (_, index) => {
     const from = shape.startRad + index * step
     const to = from + step
-    const control1 = fromUnitCircle(shape, Math.cos(from) - handle * Math.sin(from), Math.sin(from) + handle * Math.cos(from))
-    const control2 = fromUnitCircle(shape, Math.cos(to) + handle * Math.sin(to), Math.sin(to) - handle * Math.cos(to))
-    return [control1, control2, index === count - 1 ? end : fromUnitCircle(shape, Math.cos(to), Math.sin(to))] as const
+    const control1 = fromUnitCircle(
+      shape,
+      Math.cos(from) - handle * Math.sin(from),
+      Math.sin(from) + handle * Math.cos(from),
+    )
+    const control2 = fromUnitCircle(
+      shape,
+      Math.cos(to) + handle * Math.sin(to),
+      Math.sin(to) - handle * Math.cos(to),
+    )
+    return [
+      control1,
+      control2,
+      index === count - 1 ? end : fromUnitCircle(shape, Math.cos(to), Math.sin(to)),
+    ] as const
   })
 }
 

@@ -8,7 +8,7 @@ export const pointOnPaper = (point: Point, origin: Point, scale: number): Point 
   y: origin.y + scale * point.y,
 })
 
-/** A path of the model on paper; scale is positive, so that turns keep their sign. */
+/** A path of the model on paper; scale is positive, so that turns keep their sign. An arc without a bulge becomes the line it is. */
 export function pathOnPaper(path: Path, origin: Point, scale: number): Path {
   return path.map((segment) => segmentOnPaper(segment, origin, scale))
 }
@@ -18,8 +18,9 @@ function segmentOnPaper(segment: Segment, origin: Point, scale: number): Segment
   const ends = { start: place(segment.start), end: place(segment.end) }
   switch (segment.kind) {
     case 'line':
-    case 'arc':
       return { ...segment, ...ends }
+    case 'arc':
+      return segment.bulge === 0 ? { kind: 'line', ...ends } : { ...segment, ...ends }
     case 'ellipse':
       return {
         ...segment,

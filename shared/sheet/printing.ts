@@ -26,7 +26,8 @@ export function lengthPrinterOf(unit: LengthUnit, shown: readonly number[]): Len
       unitName: 'inches',
       grain: `Written to the nearest 1/${INCH_FRACTION} in; the DXF holds every size in full.`,
       length: (mm) => printLength(mm, { unit: 'in', fraction: INCH_FRACTION, withUnit: false }),
-      plusMinus: (standardDeviationMm) => `± ${printNumber(plusMinus95(standardDeviationMm) / MM_PER_INCH, 3)}`,
+      plusMinus: (standardDeviationMm) =>
+        `± ${printNumber(plusMinus95(standardDeviationMm) / MM_PER_INCH, 3)}`,
     }
   }
   const places = shown.every((mm) => Math.abs(mm - Math.round(mm * 10) / 10) <= ON_GRID_MM) ? 1 : 2
@@ -37,4 +38,9 @@ export function lengthPrinterOf(unit: LengthUnit, shown: readonly number[]): Len
     length: (mm) => printLength(mm, { unit: 'mm', places, withUnit: false }),
     plusMinus: (standardDeviationMm) => `± ${printNumber(plusMinus95(standardDeviationMm), places)}`,
   }
+}
+
+/** The printer for the saw: a tenth of a millimetre, or a 64th of an inch, is as fine as a stop is set. */
+export function benchPrinterOf(unit: LengthUnit): LengthPrinter {
+  return lengthPrinterOf(unit, [])
 }

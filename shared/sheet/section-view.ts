@@ -1,5 +1,5 @@
 import type { Point, Segment } from '@shared/geometry'
-import { boundsOf } from '@shared/geometry'
+import { boundsOf, extremaOf, pointAt } from '@shared/geometry'
 import { faceOf, woodFaceOf, woodOutlineOf } from '@shared/section'
 import type { Member, Section } from '@shared/section'
 import { LINE_WIDTH_MM, linesItem, pathItem } from './drawing'
@@ -33,7 +33,9 @@ export interface SectionView {
 export function sectionViewOf(section: Section, printer: LengthPrinter, scale: number): SectionView {
   const isTabulated = section.members.length > MOST_DRAWN_BREAKS
   const shape = shapeItems(section, scale)
-  const { min, max } = boundsOf(pathOnPaper([...woodOutlineOf(section), ...faceOf(section).path], NOWHERE, scale))
+  const { min, max } = boundsOf(
+    pathOnPaper([...woodOutlineOf(section), ...faceOf(section).path], NOWHERE, scale),
+  )
   const values = ordinateValues(section, printer, scale, isTabulated)
   const below = ordinatesBeside('below', values.below, min.y)
   const left = ordinatesBeside('left', values.left, min.x)
@@ -100,10 +102,20 @@ function ordinateValues(
   const { rebate, backSplay } = section
   const low = (x: number): Point => ({ x, y: 0 })
   const hasSplay = backSplay.x > 0 && backSplay.height > 0
-  const widest = max.x > last.x ? [extremePoint(path, 'x', max.x)] : []
-  const highest = [extremePoint(path, 'y', max.y)]
-  const onX = [...shown, ...widest, low(rebate.width), ...(hasSplay ? [low(max.x - backSplay.x)] : []), low(min.x)]
-  const onLeft = [{ x: 0, y: first.y }, { x: 0, y: rebate.depth }, { x: rebate.width, y: 0 }]
+  const widest = max.x > last.x ? [extremePoint(path, 'x')] : []
+  const highest = [extremePoint(path, 'y')]
+  const onX = [
+    ...shown,
+    ...widest,
+    low(rebate.width),
+    ...(hasSplay ? [low(max.x - backSplay.x)] : []),
+    low(min.x),
+  ]
+  const onLeft = [
+    { x: 0, y: first.y },
+    { x: 0, y: rebate.depth },
+    { x: rebate.width, y: 0 },
+  ]
   const onRight = [...shown.slice(1), ...highest, ...(hasSplay ? [{ x: last.x, y: backSplay.height }] : [])]
   const left = distinctOrdinates(onLeft, 'y', printer, scale)
   const alreadyLeft = new Set([...left].map(({ text }) => text))
@@ -114,15 +126,17 @@ function ordinateValues(
   }
 }
 
-/** The point of a face where it reaches its greatest x or y. */
-function extremePoint(path: readonly Segment[], axis: 'x' | 'y', greatest: number): Point {
-  const segment = path.reduce((best, candidate) =>
-    boundsOf([candidate]).max[axis] > boundsOf([best]).max[axis] ? candidate : best,
+/** The point of a face where it reaches farthest along an axis. */
+function extremePoint(path: readonly Segment[], axis: 'x' | 'y'): Point {
+  const candidates = path.flatMap((segment) => [
+    segment.start,
+    segment.end,
+    ...extremaOf(segment, axis).map((t) => pointAt(segment, t)),
+  ])
+  return candidates.reduce(
+    (best, point) => (point[axis] > best[axis] ? point : best),
+    candidates[0] ?? NOWHERE,
   )
-  const { min, max } = boundsOf([segment])
-  const nearEnd = [segment.start, segment.end].find((end) => end[axis] === greatest)
-  const other = axis === 'x' ? (min.y + max.y) / 2 : (min.x + max.x) / 2
-  return nearEnd ?? (axis === 'x' ? { x: greatest, y: other } : { x: other, y: greatest })
 }
 
 /** Of the points that would print the same value, the one nearest the value's side stands for all. */
@@ -142,7 +156,12 @@ function distinctOrdinates(
   return [...nearest].map(([text, { x, y }]) => ({ text, feature: { x: x * scale, y: y * scale } }))
 }
 
-function labelsOf(section: Section, printer: LengthPrinter, scale: number, isTabulated: boolean): MemberLabel[] {
+function labelsOf(
+  section: Section,
+  printer: LengthPrinter,
+  scale: number,
+  isTabulated: boolean,
+): MemberLabel[] {
   const { path, memberOf } = woodFaceOf(section)
   return section.members.flatMap((member, index) => {
     const number = index + 1

@@ -16,7 +16,10 @@ const BLOCK_GAP_MM = 4
 const TWO_COLUMNS_FROM_MM = 150
 
 /** What the mill must know of the section besides its face. */
-export function sectionRows({ section, measures, vocabulary }: SheetInput, printer: LengthPrinter): NoteRow[] {
+export function sectionRows(
+  { section, measures, vocabulary }: SheetInput,
+  printer: LengthPrinter,
+): NoteRow[] {
   const { length } = printer
   const { wood } = measures
   const { rebate, backSplay, tolerance } = section
@@ -27,13 +30,19 @@ export function sectionRows({ section, measures, vocabulary }: SheetInput, print
       label: wordOf(vocabulary, 'rebate'),
       text: `${length(rebate.width)} wide, ${length(rebate.depth)} deep from the back`,
     },
-    { label: 'lip', text: `${length(wood.lipMm)} of wood over the ${wordOf(vocabulary, 'rebate')} at the sight edge` },
+    {
+      label: 'lip',
+      text: `${length(wood.lipMm)} of wood over the ${wordOf(vocabulary, 'rebate')} at the sight edge`,
+    },
     {
       label: `back ${wordOf(vocabulary, 'splay')}`,
       text: hasSplay ? `${length(backSplay.x)} in at the wall, from ${length(backSplay.height)} up` : '',
     },
     { label: 'gesso', text: gessoText(section.gesso, printer) },
-    { label: 'least wood', text: `${length(wood.leastWood.thicknessMm)} between ${wordOf(vocabulary, 'rebate')} and face` },
+    {
+      label: 'least wood',
+      text: `${length(wood.leastWood.thicknessMm)} between ${wordOf(vocabulary, 'rebate')} and face`,
+    },
     { label: 'blank, run flat', text: blankText(wood.blank, printer) },
     { label: 'tolerance', text: `± ${length(tolerance)} on the wood section` },
     { label: 'figures', text: printer.grain },
@@ -41,7 +50,8 @@ export function sectionRows({ section, measures, vocabulary }: SheetInput, print
 }
 
 function gessoText(gesso: SheetInput['section']['gesso'], { length }: LengthPrinter): string {
-  if (typeof gesso === 'number') return gesso === 0 ? 'none' : `${length(gesso)} over the whole face, allowed for in the wood`
+  if (typeof gesso === 'number')
+    return gesso === 0 ? 'none' : `${length(gesso)} over the whole face, allowed for in the wood`
   if (gesso.length === 0) return 'none'
   const stretches = gesso.map(({ from, to, thickness }) => `${length(thickness)} from break ${from} to ${to}`)
   return `${stretches.join(', ')}; allowed for in the wood`
@@ -75,11 +85,17 @@ export function millRows(mill: MillText, vocabulary: SheetInput['vocabulary']): 
 }
 
 /** Figures, order and cautions in the width given: in two columns where it is wide. */
-export function sheetNotes(input: SheetInput, printer: LengthPrinter, scaleText: string, widthMm: number): Block {
+export function sheetNotes(
+  input: SheetInput,
+  printer: LengthPrinter,
+  scaleText: string,
+  widthMm: number,
+): Block {
   const isWide = widthMm >= TWO_COLUMNS_FROM_MM
   const columnMm = isWide ? (widthMm - COLUMN_GAP_MM) / 2 : widthMm
   const figures = notesBlock('Section', sectionRows(input, printer), columnMm)
-  const order = input.mill === undefined ? [] : [notesBlock('To run', millRows(input.mill, input.vocabulary), columnMm)]
+  const order =
+    input.mill === undefined ? [] : [notesBlock('To run', millRows(input.mill, input.vocabulary), columnMm)]
   const sentences = [...standingCautions(input, scaleText), ...(input.cautions ?? [])]
   const cautions = sentencesBlock('Take care', sentences, columnMm)
   if (!isWide) return stacked([figures, ...order, cautions], BLOCK_GAP_MM)
@@ -95,4 +111,3 @@ function besideOneAnother(left: Block, right: Block): Block {
     items: [...left.items, ...shiftedItems(right.items, { x: shift, y: 0 })],
   }
 }
-

@@ -19,7 +19,7 @@ import { sectionViewOf } from './section-view'
 import type { SectionView } from './section-view'
 import type { SheetInput } from './sheet-input'
 import { sheetNotes } from './sheet-notes'
-import { statusText, titleBlock } from './title-block'
+import { statusText, TITLE_BLOCK_HEIGHT_MM, titleBlock } from './title-block'
 import type { TitleBlockFacts } from './title-block'
 
 /** Blank inside the frame and between the parts of a sheet, mm. */
@@ -63,9 +63,17 @@ export function sheetOf(input: SheetInput): Drawing {
 function printerFor({ unit, section, measures }: SheetInput): LengthPrinter {
   const { wood } = measures
   const shown = section.members.flatMap(({ width, rise }) => [width, rise])
-  const gesso = typeof section.gesso === 'number' ? [section.gesso] : section.gesso.map(({ thickness }) => thickness)
+  const gesso =
+    typeof section.gesso === 'number' ? [section.gesso] : section.gesso.map(({ thickness }) => thickness)
   const { rebate, backSplay } = section
-  const others = [section.sightEdgeHeight, rebate.width, rebate.depth, backSplay.x, backSplay.height, section.tolerance]
+  const others = [
+    section.sightEdgeHeight,
+    rebate.width,
+    rebate.depth,
+    backSplay.x,
+    backSplay.height,
+    section.tolerance,
+  ]
   return lengthPrinterOf(unit, [...shown, ...gesso, ...others, wood.widthMm, wood.depthMm, wood.lipMm])
 }
 
@@ -74,10 +82,14 @@ interface Parts {
   readonly printer: LengthPrinter
   readonly rows: readonly MemberRow[]
   readonly bar: Block
-  readonly titleHeightMm: number
 }
 
-const facts = (printer: LengthPrinter, scale: string, sheetNumber: number, sheetCount: number): TitleBlockFacts => ({
+const facts = (
+  printer: LengthPrinter,
+  scale: string,
+  sheetNumber: number,
+  sheetCount: number,
+): TitleBlockFacts => ({
   documentType: 'Profile sheet',
   scale,
   unitName: printer.unitName,
@@ -91,7 +103,6 @@ function partsOf(input: SheetInput, printer: LengthPrinter): Parts {
     printer,
     rows: memberRowsOf(input.section, input.vocabulary, printer),
     bar: checkBar(input.unit).block,
-    titleHeightMm: titleBlock(input, facts(printer, '1:1', 1, 1)).heightMm,
   }
 }
 
@@ -126,7 +137,7 @@ const viewHeight = (view: SectionView): number => view.top - view.bottom
 
 /** A4: view, table, notes, bar and title block under one another; all of the table or not at all. */
 function arrangedInOneColumn(attempt: Attempt): Layout | undefined {
-  const { paper, view, scale, rows, bar, titleHeightMm } = attempt
+  const { paper, view, scale, rows, bar } = attempt
   const space = drawingSpaceOf(paper)
   const left = space.left + INSET_MM
   const widthMm = space.right - INSET_MM - left
@@ -135,7 +146,7 @@ function arrangedInOneColumn(attempt: Attempt): Layout | undefined {
   const tableTop = viewTop - viewHeight(view) - GAP_MM
   const notesTop = tableTop - tableHeightMm(rows.length) - GAP_MM
   const barTop = notesTop - notes.heightMm - GAP_MM
-  const fits = viewWidth(view) <= widthMm && barTop - bar.heightMm >= space.bottom + titleHeightMm + 2
+  const fits = viewWidth(view) <= widthMm && barTop - bar.heightMm >= space.bottom + TITLE_BLOCK_HEIGHT_MM + 2
   if (!fits) return undefined
   return {
     ...{ paper, scale, view },
@@ -152,8 +163,8 @@ function arrangedInOneColumn(attempt: Attempt): Layout | undefined {
 const centred = (left: number, widthMm: number, own: number): number => left + (widthMm - own) / 2
 
 /** What the right-hand column of a lying sheet takes: the table from the top down, the title block in the corner. */
-function rowsInRightColumn({ rows, titleHeightMm }: Attempt, space: Space, top: number): number | undefined {
-  const fitting = Math.min(rows.length, rowsThatFit(top - space.bottom - titleHeightMm - GAP_MM))
+function rowsInRightColumn({ rows }: Attempt, space: Space, top: number): number | undefined {
+  const fitting = Math.min(rows.length, rowsThatFit(top - space.bottom - TITLE_BLOCK_HEIGHT_MM - GAP_MM))
   return fitting === rows.length || fitting >= LEAST_ROWS ? fitting : undefined
 }
 
@@ -272,6 +283,11 @@ function headingItems({ viewCorner, view, scale, paper }: Layout, printer: Lengt
     textItem('notes', { x, y: y - LETTER_MM.heading }, `Wood section ${scale.text}`, LETTER_MM.heading, {
       weight: 'semibold',
     }),
-    textItem('notes', { x, y: y - LETTER_MM.heading - 4 }, `${printer.unitName}; ${where}${tabled}`, LETTER_MM.small),
+    textItem(
+      'notes',
+      { x, y: y - LETTER_MM.heading - 4 },
+      `${printer.unitName}; ${where}${tabled}`,
+      LETTER_MM.small,
+    ),
   ]
 }

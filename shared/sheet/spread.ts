@@ -13,7 +13,8 @@ export function spreadApart(wanted: readonly number[], pitch: number): number[] 
     for (;;) {
       const last = pools.at(-1)
       const before = pools.at(-2)
-      if (last === undefined || before === undefined || before.sum / before.count <= last.sum / last.count) break
+      if (last === undefined || before === undefined || before.sum / before.count <= last.sum / last.count)
+        break
       before.sum += last.sum
       before.count += last.count
       pools.pop()

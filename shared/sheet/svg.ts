@@ -57,7 +57,8 @@ function linesOf(item: LinesItem, pageHeightMm: number): string {
 
 function strokeOf({ lineWidthMm, tone, dash }: { lineWidthMm: number; tone: Tone; dash: Dash }): string {
   if (lineWidthMm === 0) return ''
-  const dashes = dash === 'dashed' ? ` stroke-dasharray="${dashPattern(lineWidthMm).map(numberOf).join(' ')}"` : ''
+  const dashes =
+    dash === 'dashed' ? ` stroke-dasharray="${dashPattern(lineWidthMm).map(numberOf).join(' ')}"` : ''
   return ` stroke="${TONES[tone]}" stroke-width="${numberOf(lineWidthMm)}"${dashes}`
 }
 
@@ -103,9 +104,11 @@ function commandOf(segment: Segment, place: (point: Point) => string): string {
 }
 
 /** Large-arc and sweep flags; the page's y runs down, so that a left turn of ours is SVG's negative direction. */
-const flagsOf = (sweepRad: number): string => `${Math.abs(sweepRad) > Math.PI ? 1 : 0} ${sweepRad > 0 ? 0 : 1}`
+const flagsOf = (sweepRad: number): string =>
+  `${Math.abs(sweepRad) > Math.PI ? 1 : 0} ${sweepRad > 0 ? 0 : 1}`
 
-const placeOn = (pageHeightMm: number) => (point: Point) => `${numberOf(point.x)} ${numberOf(pageHeightMm - point.y)}`
+const placeOn = (pageHeightMm: number) => (point: Point) =>
+  `${numberOf(point.x)} ${numberOf(pageHeightMm - point.y)}`
 
 /** A number without exponent and without a lone minus zero. */
 function numberOf(value: number): string {
@@ -113,6 +116,13 @@ function numberOf(value: number): string {
   return text === '-0' ? '0' : text
 }
 
-const ESCAPES: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' }
+const ESCAPES: Record<string, string> = {
+  '&': '&amp;',
+  '<': '&lt;',
+  '>': '&gt;',
+  '"': '&quot;',
+  "'": '&#39;',
+}
 
-const escaped = (text: string): string => text.replace(/[&<>"']/g, (character) => ESCAPES[character] ?? character)
+const escaped = (text: string): string =>
+  text.replace(/[&<>"']/g, (character) => ESCAPES[character] ?? character)

@@ -19,6 +19,12 @@ interface FieldRow {
   readonly fields: readonly Field[]
 }
 
+/** What the title block takes from the sheet's input. */
+export type TitleBlockInput = Pick<
+  SheetInput,
+  'workshop' | 'commissionNumber' | 'title' | 'client' | 'accession' | 'state'
+>
+
 export interface TitleBlockFacts {
   readonly documentType: string
   readonly scale: string
@@ -33,15 +39,19 @@ const LABEL_DROP_MM = 1 + LETTER_MM.small
 const VALUE_DROP_MM = LABEL_DROP_MM + 1.3
 const VALUE_PITCH = 1.7
 
+/** Heights of the rows from the top, mm; on every sheet alike. */
+const ROW_HEIGHTS_MM = [9, 15, 12.5, 10, 8.5] as const
+export const TITLE_BLOCK_HEIGHT_MM = ROW_HEIGHTS_MM.reduce((sum, heightMm) => sum + heightMm, 0)
+
 /** What state the section is in, in the words that people use of it. */
 export function statusText({ state }: Pick<SheetInput, 'state'>): string {
   if (state.kind === 'draft') return 'draft, not approved'
   return state.approval === undefined ? 'put forward, not approved' : 'approved'
 }
 
-export function titleBlock(input: SheetInput, facts: TitleBlockFacts): Block {
+export function titleBlock(input: TitleBlockInput, facts: TitleBlockFacts): Block {
   const rows = rowsOf(input, facts)
-  const heightMm = rows.reduce((sum, row) => sum + row.heightMm, 0)
+  const heightMm = TITLE_BLOCK_HEIGHT_MM
   const items: DrawingItem[] = [
     pathItem('title-block', rectanglePath(0, -heightMm, TITLE_BLOCK_WIDTH_MM, heightMm), LINE_WIDTH_MM.wide, {
       closed: true,
@@ -62,10 +72,28 @@ export function titleBlock(input: SheetInput, facts: TitleBlockFacts): Block {
 }
 
 const ruleAcross = (y: number): DrawingItem =>
-  linesItem('title-block', [[{ x: 0, y }, { x: TITLE_BLOCK_WIDTH_MM, y }]], LINE_WIDTH_MM.narrow)
+  linesItem(
+    'title-block',
+    [
+      [
+        { x: 0, y },
+        { x: TITLE_BLOCK_WIDTH_MM, y },
+      ],
+    ],
+    LINE_WIDTH_MM.narrow,
+  )
 
 const ruleDown = (x: number, top: number, heightMm: number): DrawingItem =>
-  linesItem('title-block', [[{ x, y: top }, { x, y: top - heightMm }]], LINE_WIDTH_MM.narrow)
+  linesItem(
+    'title-block',
+    [
+      [
+        { x, y: top },
+        { x, y: top - heightMm },
+      ],
+    ],
+    LINE_WIDTH_MM.narrow,
+  )
 
 /** A label in small letters at the top of the cell, the value beneath it: on two lines where it needs and the cell has them. */
 function fieldItems(field: Field, left: number, top: number, rowMm: number): DrawingItem[] {
@@ -93,14 +121,14 @@ function fieldItems(field: Field, left: number, top: number, rowMm: number): Dra
   return [label, ...values]
 }
 
-function rowsOf(input: SheetInput, facts: TitleBlockFacts): FieldRow[] {
+function rowsOf(input: TitleBlockInput, facts: TitleBlockFacts): FieldRow[] {
   const { state } = input
   const isIssue = state.kind === 'issue'
   const approval = isIssue ? state.approval : undefined
   const sheet = `${facts.sheetNumber}/${facts.sheetCount}`
   return [
     {
-      heightMm: 9,
+      heightMm: ROW_HEIGHTS_MM[0],
       fields: [
         { label: 'Scale', text: facts.scale, widthMm: 20, weight: 'semibold' },
         { label: 'Units', text: facts.unitName, widthMm: 20 },
@@ -110,14 +138,14 @@ function rowsOf(input: SheetInput, facts: TitleBlockFacts): FieldRow[] {
       ],
     },
     {
-      heightMm: 15,
+      heightMm: ROW_HEIGHTS_MM[1],
       fields: [
         { label: 'Title', text: input.title, widthMm: 118, heightMm: LETTER_MM.heading, weight: 'semibold' },
         { label: 'Status', text: statusText(input), widthMm: 62, weight: 'semibold' },
       ],
     },
     {
-      heightMm: 12.5,
+      heightMm: ROW_HEIGHTS_MM[2],
       fields: [
         { label: 'Legal owner', text: input.workshop, widthMm: 60 },
         { label: 'Picture, accession number', text: input.accession ?? '–', widthMm: 58 },
@@ -125,7 +153,7 @@ function rowsOf(input: SheetInput, facts: TitleBlockFacts): FieldRow[] {
       ],
     },
     {
-      heightMm: 10,
+      heightMm: ROW_HEIGHTS_MM[3],
       fields: [
         { label: 'Document type', text: facts.documentType, widthMm: 60 },
         { label: 'Identification number', text: input.commissionNumber, widthMm: 58, weight: 'semibold' },
@@ -141,7 +169,7 @@ function rowsOf(input: SheetInput, facts: TitleBlockFacts): FieldRow[] {
       ],
     },
     {
-      heightMm: 8.5,
+      heightMm: ROW_HEIGHTS_MM[4],
       fields: [
         {
           label: 'SHA-256 of the section as put forward',
