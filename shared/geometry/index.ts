@@ -50,7 +50,8 @@ export {
   startTangentOf,
   tangentAt,
 } from './evaluate'
-export { areaMomentsOf, signedAreaOf } from './moments'
+export { signedAreaOf } from './area'
+export { areaMomentsOf } from './moments'
 export type { AreaMoments } from './moments'
 export { lengthOf, lineMomentsOf, segmentLengthOf } from './length'
 export type { LengthOptions, LineMoments } from './length'

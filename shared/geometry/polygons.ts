@@ -1,4 +1,3 @@
-/// <reference path="./clipper-lib.d.ts" />
 import ClipperLib, { type IntPath, type IntPaths } from 'clipper-lib'
 import { Failure } from '@shared/failure'
 import { CHORD_ERROR_MM, POLYGON_UNITS_PER_MM } from '@shared/units'

@@ -1,5 +1,6 @@
 export { parseLength } from './length'
-export type { LengthUnit, ParsedLength } from './length'
+export type { ParsedLength } from './length'
+export type { LengthUnit } from './length-tokens'
 export {
   plusMinus95,
   printArea,

@@ -1,5 +1,8 @@
 import { rationalFrom, rationalFromDecimal, type Rational } from './rational'
 
+/** The unit a person works in: one setting for the whole workshop. */
+export type LengthUnit = 'mm' | 'in'
+
 /** Millimetres in a unit, as an exact fraction. */
 export const MM_OF = {
   mm: rationalFrom(1n),

@@ -1,6 +1,5 @@
 import { Failure } from '@shared/failure'
-import type { LengthUnit } from './length'
-import { MM_OF } from './length-tokens'
+import { MM_OF, type LengthUnit } from './length-tokens'
 import {
   doubleFrom,
   productOf,
