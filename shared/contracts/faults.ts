@@ -69,7 +69,7 @@ function mendOf(issue: Issue): string {
     case 'invalid_value':
       return `it must be ${issue.values.map((value) => JSON.stringify(value)).join(' or ')}`
     case 'invalid_union':
-      return issue.note === 'No matching discriminator'
+      return 'discriminator' in issue && issue.discriminator !== undefined
         ? 'it must be one of the kinds known here'
         : 'no known form fits it'
     default:

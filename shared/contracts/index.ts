@@ -40,6 +40,15 @@ export {
   HealthAnswer,
   ReadyAnswer,
   FaultAnswer,
+  PeopleAnswer,
+  ClientsAnswer,
+  MillsAnswer,
+  MillCardsAnswer,
+  SawsAnswer,
+  CommissionsAnswer,
+  MeasurementsAnswer,
+  TrailAnswer,
+  WaitingAnswer,
 } from './params'
 export {
   SignInRequest,

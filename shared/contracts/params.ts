@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { Stage } from './commissions'
+import { CommissionLine, MeasurementAnswer, Stage, TrailLine, WaitingLine } from './commissions'
+import { ClientAnswer, MillAnswer, MillCardAnswer, PersonAnswer, SawCardAnswer } from './people'
 import { Id } from './scalars'
 
 /** What stands in a path or after its question mark. */
@@ -27,3 +28,14 @@ export const FaultAnswer = z.strictObject({
   }),
   requestId: z.string(),
 })
+
+/** Lists, as they are answered. */
+export const PeopleAnswer = z.array(PersonAnswer)
+export const ClientsAnswer = z.array(ClientAnswer)
+export const MillsAnswer = z.array(MillAnswer)
+export const MillCardsAnswer = z.array(MillCardAnswer)
+export const SawsAnswer = z.array(SawCardAnswer)
+export const CommissionsAnswer = z.array(CommissionLine)
+export const MeasurementsAnswer = z.array(MeasurementAnswer)
+export const TrailAnswer = z.array(TrailLine)
+export const WaitingAnswer = z.array(WaitingLine)

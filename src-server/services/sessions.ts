@@ -13,15 +13,25 @@ const ABSOLUTE = 14 * 24 * 60 * MINUTE
 /** `seen` is written at most this often. */
 const SEEN_EVERY = MINUTE
 
+/** A session that was begun just now, and whose it is. */
+export interface BegunSession {
+  readonly sessionId: string
+  readonly personId: string
+}
+
 export interface LiveSession {
   readonly actor: Actor
   readonly sessionId: string
 }
 
-export async function beginSession(tx: Tx, personId: string): Promise<Session> {
+export async function beginSession(tx: Tx, personId: string): Promise<BegunSession> {
   const at = now()
   const expiresAt = new Date(at.getTime() + ABSOLUTE)
-  return Session.create({ personId, createdAt: at, seenAt: at, expiresAt }, { transaction: tx })
+  const session = await Session.create(
+    { personId, createdAt: at, seenAt: at, expiresAt },
+    { transaction: tx },
+  )
+  return { sessionId: session.id, personId }
 }
 
 /** The session if it is neither ended, idle too long nor past its end, and its person is still active. */
@@ -56,9 +66,7 @@ export async function endSessionsOf(tx: Tx, personId: string): Promise<void> {
 async function findActor(personId: string): Promise<Actor | undefined> {
   const person = await Person.findOne({
     where: { id: personId, state: 'active' },
-    include: [
-      { model: Membership, as: 'memberships', where: { state: 'active' }, required: false, separate: false },
-    ],
+    include: [{ model: Membership, as: 'memberships', where: { state: 'active' }, required: false }],
   })
   if (person === null) return undefined
   const memberships = (person.memberships ?? []).map(({ role, clientId, millId }) => ({
