@@ -1,5 +1,5 @@
 import { Failure } from '@shared/failure'
-import { extremaOf, pointAt, tangentAt } from '@shared/geometry'
+import { boundsOf, extremaOf, pointAt, tangentAt } from '@shared/geometry'
 import type { Path, Point, Segment } from '@shared/geometry'
 import { alongFaceAt, faceHeightAt } from './face-depth'
 import type { KnifeHead } from './head'
@@ -27,6 +27,7 @@ export function turnsOf(segment: Segment): number[] {
   const apart = inner.filter((t, index) => index === 0 || t - (inner[index - 1] ?? 0) > END_PARAMETER)
   return [0, ...apart, 1]
 }
+
 /** A turn nearer than this to an end, as a share of the segment, is that end. */
 const END_PARAMETER = 1e-9
 
@@ -36,15 +37,8 @@ export function faceExtentOf(face: Path): FaceExtent {
     const says = 'The face has no members; put in at least one before asking for its knife.'
     throw new Failure('input-invalid', { says, faults: [{ path: '/members', code: 'empty', says }] })
   }
-  const points = face.flatMap((segment) => turnsOf(segment).map((t) => pointAt(segment, t)))
-  const xs = points.map(({ x }) => x)
-  const ys = points.map(({ y }) => y)
-  return {
-    leastX: Math.min(...xs),
-    greatestX: Math.max(...xs),
-    leastY: Math.min(...ys),
-    greatestY: Math.max(...ys),
-  }
+  const { min, max } = boundsOf(face)
+  return { leastX: min.x, greatestX: max.x, leastY: min.y, greatestY: max.y }
 }
 
 /** Greatest depth of a face below its highest point, mm: the D of the knife. */
