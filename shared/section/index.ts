@@ -1,0 +1,42 @@
+export { SIGHT_EDGE_KEY } from './document'
+export type {
+  Basis,
+  Bead,
+  Cavetto,
+  CymaRecta,
+  CymaReversa,
+  DraftGessoStretch,
+  DraftMember,
+  DraftSection,
+  Fillet,
+  Flutes,
+  Free,
+  FreeCurve,
+  GessoStretch,
+  Member,
+  MemberBasis,
+  MemberKind,
+  Ovolo,
+  Pair,
+  Quirk,
+  Reeds,
+  Scotia,
+  Section,
+  Splay,
+  Thumb,
+  Torus,
+} from './document'
+export { defaultArcOf, memberEndOf, memberSegments } from './member-segments'
+export { SECTION_DEFAULTS, withDefaults } from './defaults'
+export type { PartialMember, PartialSection } from './defaults'
+export { faceOf } from './face'
+export type { Face } from './face'
+export { outlineOf } from './outline'
+export { canonicalText } from './canonical'
+export { sha256Hex } from './digest'
+export { issueTextOf, plainSectionOf, sectionSha256 } from './issue-text'
+export { breakKeyOf, breakNumberOf, draftFromSection, findBreakNumber, sectionFromDraft } from './draft'
+export { applyEdit } from './edit'
+export type { AppliedEdit, SectionEdit, SetEdit } from './edit'
+export { basisCountsOf, missingBasisOf } from './basis'
+export type { BasisCounts } from './basis'
