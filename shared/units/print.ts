@@ -81,7 +81,7 @@ function plainDecimalOf(value: number): string {
 /** Not every double of mm is 25.4 times a double of inches, so decimals are added until the text reads back as the same mm. */
 function exactInchesOf(mm: number): string {
   const inches = quotientOf(rationalFromDouble(Math.abs(mm)), MM_OF.in)
-  const leading = Math.floor(Math.log10(Math.abs(mm) / 25.4))
+  const leading = Math.floor(Math.log10(Math.abs(mm)) - Math.log10(25.4))
   for (let places = Math.max(0, 14 - leading); ; places += 1) {
     const scale = 10n ** BigInt(places)
     const whole = nearestWhole(productOf(inches, rationalFrom(scale)))
