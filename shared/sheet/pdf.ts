@@ -108,7 +108,8 @@ function drawPath(document: jsPDF, item: PathItem, pageHeightMm: number): void {
     document.stroke()
     return
   }
-  document.setFillColor(GREYS[item.fill])
+  const fill = GREYS[item.fill]
+  document.setFillColor(fill, fill, fill)
   if (item.lineWidthMm === 0) document.fill()
   else document.fillStroke()
 }
