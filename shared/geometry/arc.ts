@@ -9,10 +9,13 @@ export interface ArcGeometry {
   readonly sweepRad: number
 }
 
+/** So flat that its sagitta is lost in rounding many times over, and its radius beyond the doubles: taken as a line. */
+export const isStraight = ({ bulge }: ArcSegment): boolean => Math.abs(bulge) < 1e-100
+
 /** Angle turned through from start to end, rad. */
 export const sweepOf = (arc: ArcSegment): number => 4 * Math.atan(arc.bulge)
 
-/** Radius, mm; Infinity for a straight arc. From chord c and bulge b: c (1 + b²) / 4|b|, which is the handbook's (c² + 4h²)/8h with h = bc/2. */
+/** Radius, mm; Infinity for a straight arc, bulge 0. From chord c and bulge b: c (1 + b²) / 4|b|, which is the handbook's (c² + 4h²)/8h with h = bc/2. */
 export function radiusOf(arc: ArcSegment): number {
   const chord = Math.hypot(arc.end.x - arc.start.x, arc.end.y - arc.start.y)
   return (chord * (1 + arc.bulge ** 2)) / (4 * Math.abs(arc.bulge))
@@ -22,7 +25,7 @@ export function radiusOf(arc: ArcSegment): number {
 export function arcLengthOf(arc: ArcSegment): number {
   const chord = Math.hypot(arc.end.x - arc.start.x, arc.end.y - arc.start.y)
   const half = 2 * Math.atan(arc.bulge)
-  return half === 0 ? chord : (chord * half * (1 + arc.bulge ** 2)) / (2 * arc.bulge)
+  return isStraight(arc) ? chord : chord * (half / (2 * arc.bulge)) * (1 + arc.bulge ** 2)
 }
 
 /** Centre, radius, start direction and sweep. A straight arc (bulge 0) has none and is refused. */

@@ -50,10 +50,13 @@ function areaTermOf(segment: Segment, x0: number, y0: number): number {
   }
 }
 
+/** Below it a cap's area is c² b/3 to the last digit: the next term is b²/5 of that. */
+const FLAT_BULGE = 1e-9
+
 /** Area between an arc and its chord, r²(s − sin s)/2, signed like the sweep; r² from the chord, so that flat arcs lose nothing. */
 function arcCapAreaOf({ start, end, bulge }: ArcSegment): number {
-  if (bulge === 0) return 0
   const chordSquared = (end.x - start.x) ** 2 + (end.y - start.y) ** 2
+  if (Math.abs(bulge) < FLAT_BULGE) return (chordSquared * bulge) / 3
   const oneAndSquare = 1 + bulge * bulge
   const sweep = 4 * Math.atan(bulge)
   return (((chordSquared * oneAndSquare) / (32 * bulge)) * oneAndSquare * sineDeficitOf(sweep)) / bulge

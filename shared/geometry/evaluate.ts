@@ -1,5 +1,5 @@
 import { assertNever } from '@shared/failure'
-import { arcLengthOf, sweepOf } from './arc'
+import { arcLengthOf, isStraight, sweepOf } from './arc'
 import { cross, leftOf, magnitudeOf, minus, rotated, scaled, unitOf } from './point'
 import type { ArcSegment, CubicSegment, EllipseSegment, Path, Point, Segment } from './segment'
 
@@ -31,9 +31,10 @@ export function pointAt(segment: Segment, t: number): Point {
  * By the inscribed angle: the chord to the point is sin(t s/2)/sin(s/2) of the whole chord, turned by (t − 1) s/2 from it. No centre is
  * used, so that an arc of any radius, even a straight one, is evaluated to rounding.
  */
-function arcPointAt({ start, end, bulge }: ArcSegment, t: number): Point {
+function arcPointAt(arc: ArcSegment, t: number): Point {
+  const { start, end, bulge } = arc
   const half = 2 * Math.atan(bulge)
-  const ratio = half === 0 ? t : (Math.sin(t * half) * (1 + bulge * bulge)) / (2 * bulge)
+  const ratio = isStraight(arc) ? t : (Math.sin(t * half) * (1 + bulge * bulge)) / (2 * bulge)
   const turn = (t - 1) * half
   const c = ratio * Math.cos(turn)
   const s = ratio * Math.sin(turn)

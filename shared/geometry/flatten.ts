@@ -1,6 +1,6 @@
 import { assertNever, Failure } from '@shared/failure'
 import { CHORD_ERROR_MM } from '@shared/units'
-import { radiusOf, sweepOf } from './arc'
+import { isStraight, radiusOf, sweepOf } from './arc'
 import { bendOf, pointAt } from './evaluate'
 import type { Path, Point, Segment } from './segment'
 
@@ -35,7 +35,7 @@ function chordsOf(segment: Segment, chordErrorMm: number): number {
     case 'line':
       return 1
     case 'arc': {
-      if (segment.bulge === 0) return 1
+      if (isStraight(segment)) return 1
       // sagitta of a step: r (1 − cos(step/2)) = 2 r sin²(step/4)
       const sine = Math.sqrt(Math.min(1, chordErrorMm / (2 * radiusOf(segment))))
       const step = Math.min(4 * Math.asin(sine), (2 * Math.PI) / 3)

@@ -46,9 +46,8 @@ function shiftedLine(line: LineSegment, distanceMm: number): LineSegment {
 /** A left turn has its centre on the left: its radius shrinks by a distance to the left, a right turn's grows. */
 function offsetArc(arc: ArcSegment, distanceMm: number): Path {
   if (isSamePoint(arc.start, arc.end)) return []
-  const left = arc.bulge === 0 ? Infinity : radiusOf(arc) * Math.sign(arc.bulge)
-  const remains = arc.bulge > 0 ? left - distanceMm : distanceMm - left
-  if (arc.bulge !== 0 && !(remains > 0)) return []
+  const remains = radiusOf(arc) - distanceMm * Math.sign(arc.bulge)
+  if (!(remains > 0)) return []
   const start = beside(arc.start, startTangentOf(arc), distanceMm)
   const end = beside(arc.end, endTangentOf(arc), distanceMm)
   return [{ kind: 'arc', start, end, bulge: arc.bulge }]

@@ -53,12 +53,25 @@ export function doubleFrom({ numerator, denominator }: Rational): number {
   if (numerator === 0n) return 0
   const size = numerator < 0n ? -numerator : numerator
   const shift = 66 - (bitsOf(size) - bitsOf(denominator))
+  if (shift > LEAST_NORMAL_SHIFT) return subnormalFrom(size, denominator) * (numerator < 0n ? -1 : 1)
   const up = shift > 0 ? size << BigInt(shift) : size
   const down = shift < 0 ? denominator << BigInt(-shift) : denominator
   const quotient = up / down
   const sticky = up % down === 0n ? quotient : quotient | 1n
   const magnitude = scaledByPowerOfTwo(Number(sticky), -shift)
   return numerator < 0n ? -magnitude : magnitude
+}
+
+/** With a greater shift the last of 53 bits would lie below 2⁻¹⁰⁷⁴, the step of the smallest doubles. */
+const LEAST_NORMAL_SHIFT = 1087
+
+/** Rounded to that step, ties to even. */
+function subnormalFrom(size: bigint, denominator: bigint): number {
+  const up = size << 1074n
+  const steps = up / denominator
+  const twiceRest = 2n * (up % denominator)
+  const isUp = twiceRest > denominator || (twiceRest === denominator && steps % 2n === 1n)
+  return Number(isUp ? steps + 1n : steps) * Number.MIN_VALUE
 }
 
 /** In two steps, since 2 ** −1100 alone would be zero. */
