@@ -6,6 +6,8 @@ import { invalid } from '@shared/contracts'
 import { uploadFolder } from '../files/file-store'
 
 const JSON_BYTES = 1024 * 1024
+/** Largest photograph taken. */
+export const MOST_IMAGE_BYTES = 100 * 1024 * 1024
 
 /** A file that came with a request; it lies in the upload folder until the request is answered. */
 export interface Upload {

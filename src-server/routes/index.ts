@@ -1,7 +1,11 @@
+import { COMMISSION_ROUTES } from './commissions'
+import { DRAFT_ROUTES } from './drafts'
 import { HEALTH_ROUTES } from './health'
 import { PEOPLE_ROUTES } from './people'
+import { PHOTOGRAPH_ROUTES } from './photographs'
 import type { Route } from './route'
 import { SESSION_ROUTES } from './session'
+import { WAITING_ROUTES } from './waiting'
 import { WORKSHOP_ROUTES } from './workshop'
 
 /** Every route of the server, so that tests can walk them. */
@@ -10,4 +14,8 @@ export const ROUTES: readonly Route[] = [
   ...SESSION_ROUTES,
   ...PEOPLE_ROUTES,
   ...WORKSHOP_ROUTES,
+  ...COMMISSION_ROUTES,
+  ...PHOTOGRAPH_ROUTES,
+  ...DRAFT_ROUTES,
+  ...WAITING_ROUTES,
 ]

@@ -26,18 +26,19 @@ export interface RawCall {
   readonly request: RequestFacts
 }
 
-export interface Call<Who, Params, Query, Body> {
+export interface Call<Who, Params, Query, Body, Sent> {
   readonly actor: Who
   readonly params: Params
   readonly query: Query
   readonly body: Body
-  readonly upload: Upload | undefined
+  readonly upload: Sent
   readonly request: RequestFacts
 }
 
 type AnswerContract = Contract | 'file'
 type AnswerOf<A extends AnswerContract> = A extends Contract ? OutputOf<A> : FileAnswer
 type WhoOf<R extends Right | 'public'> = R extends 'public' ? undefined : Actor
+type SentOf<U extends UploadLimits | undefined> = U extends UploadLimits ? Upload : undefined
 type BodyOf<B extends Contract | undefined> = B extends Contract ? OutputOf<B> : undefined
 
 export interface Definition<
@@ -46,6 +47,7 @@ export interface Definition<
   Q extends Contract,
   B extends Contract | undefined,
   A extends AnswerContract,
+  U extends UploadLimits | undefined,
 > {
   readonly method: Method
   /** Under /api, with :names. */
@@ -60,9 +62,9 @@ export interface Definition<
   /** Most bytes of a JSON body; 1 MB where absent. */
   readonly bodyBytes?: number
   /** The body is multipart: a file, and JSON about it which `body` reads. */
-  readonly takesUpload?: UploadLimits
+  readonly takesUpload?: U
   readonly answer: A
-  handle(call: Call<WhoOf<R>, OutputOf<P>, OutputOf<Q>, BodyOf<B>>): Promise<AnswerOf<A>>
+  handle(call: Call<WhoOf<R>, OutputOf<P>, OutputOf<Q>, BodyOf<B>, SentOf<U>>): Promise<AnswerOf<A>>
 }
 
 /** A route as data, so that tests can walk all of them. */
@@ -86,7 +88,8 @@ export function route<
   P extends Contract = typeof Nothing,
   Q extends Contract = typeof Nothing,
   B extends Contract | undefined = undefined,
->(definition: Definition<R, P, Q, B, A>): Route {
+  U extends UploadLimits | undefined = undefined,
+>(definition: Definition<R, P, Q, B, A, U>): Route {
   const { method, path, right, see, params, query, body, bodyBytes, takesUpload, answer } = definition
   return {
     method,
@@ -103,7 +106,7 @@ export function route<
         params: requireValid(params ?? Nothing, raw.params) as OutputOf<P>,
         query: requireValid(query ?? Nothing, raw.query) as OutputOf<Q>,
         body: (body === undefined ? undefined : requireValid(body, raw.body)) as BodyOf<B>,
-        upload,
+        upload: upload as SentOf<U>,
         request,
       }),
   }

@@ -19,16 +19,16 @@ export interface Limit {
 export async function countTry({ what, mostTries, windowMinutes }: Limit, subject: string): Promise<void> {
   const at = now()
   const subjectSha256 = digestOf(what, subject)
-  await database().query(
+  const [row] = await database().query<{ tries: number; until: Date }>(
     `INSERT INTO rate_limit (subject_sha256, tries, until) VALUES (:subjectSha256, 1, :until)
-     ON DUPLICATE KEY UPDATE tries = IF(until <= :at, 1, tries + 1), until = IF(until <= :at, :until, until)`,
+     ON DUPLICATE KEY UPDATE tries = IF(until <= :at, 1, tries + 1), until = IF(until <= :at, :until, until)
+     RETURNING tries, until`,
     {
       replacements: { subjectSha256, at, until: new Date(at.getTime() + windowMinutes * 60_000) },
-      type: QueryTypes.INSERT,
+      type: QueryTypes.SELECT,
     },
   )
-  const row = await RateLimit.findByPk(subjectSha256)
-  if (row === null || row.tries <= mostTries) return
+  if (row === undefined || row.tries <= mostTries) return
   const seconds = Math.max(1, Math.ceil((row.until.getTime() - at.getTime()) / 1000))
   throw new Failure('too-many-tries', {
     says: `Too many tries; wait ${Math.ceil(seconds / 60)} minute(s) and try again.`,
