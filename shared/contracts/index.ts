@@ -49,6 +49,8 @@ export {
   MeasurementsAnswer,
   TrailAnswer,
   WaitingAnswer,
+  IssuesAnswer,
+  SheetParams,
 } from './params'
 export {
   SignInRequest,

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { CommissionLine, MeasurementAnswer, Stage, TrailLine, WaitingLine } from './commissions'
 import { ClientAnswer, MillAnswer, MillCardAnswer, PersonAnswer, SawCardAnswer } from './people'
+import { IssueLine } from './review'
 import { Id } from './scalars'
 
 /** What stands in a path or after its question mark. */
@@ -39,3 +40,7 @@ export const CommissionsAnswer = z.array(CommissionLine)
 export const MeasurementsAnswer = z.array(MeasurementAnswer)
 export const TrailAnswer = z.array(TrailLine)
 export const WaitingAnswer = z.array(WaitingLine)
+
+export const IssuesAnswer = z.array(IssueLine)
+/** A sheet is asked for by its thing and its form. */
+export const SheetParams = z.strictObject({ id: Id, format: z.enum(['pdf', 'dxf', 'svg']) })

@@ -5,6 +5,7 @@ import { bindFiles } from './file'
 import { bindOperations } from './operation'
 import { bindPeople } from './person'
 import { bindPhotographs } from './photograph'
+import { bindReview } from './review'
 import { bindSessions } from './session'
 import { bindTrail } from './trail'
 import { bindWorkshop } from './workshop'
@@ -18,6 +19,7 @@ export const MODEL_FAMILIES: readonly ((sequelize: Sequelize) => void)[] = [
   bindFiles,
   bindPhotographs,
   bindDrafts,
+  bindReview,
   bindTrail,
   bindOperations,
 ]

@@ -2,7 +2,19 @@ import { Model } from 'sequelize'
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize'
 import type { Evidence } from '@shared/contracts'
 import type { IssueStateName } from '@shared/course'
-import { digest, document, editVersion, instant, key, lengthMm, line, longText, ownKey, whole, word } from './columns'
+import {
+  digest,
+  document,
+  editVersion,
+  instant,
+  key,
+  lengthMm,
+  line,
+  longText,
+  ownKey,
+  whole,
+  word,
+} from './columns'
 
 /** A frozen state of the section. Only `state` ever changes, by the course in shared/course. */
 export class Issue extends Model<InferAttributes<Issue>, InferCreationAttributes<Issue>> {
@@ -89,7 +101,14 @@ export function bindReview(sequelize: Sequelize): void {
     { sequelize, tableName: 'remark', version: true },
   )
   RemarkEntry.init(
-    { id: ownKey(), remarkId: key(), authorId: key(), authorName: line(200), text: line(5000), at: instant() },
+    {
+      id: ownKey(),
+      remarkId: key(),
+      authorId: key(),
+      authorName: line(200),
+      text: line(5000),
+      at: instant(),
+    },
     { sequelize, tableName: 'remark_entry' },
   )
   Decision.init(

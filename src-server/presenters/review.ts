@@ -50,7 +50,16 @@ export function presentIssueLine({
   readonly openRemarks: number
 }): IssueLineView {
   const { id, letter, state, sha256, putForwardByName, at } = issue
-  return { id, letter, state, latest: isLatest, sha256, putForwardBy: putForwardByName, putForwardAt: at.toISOString(), openRemarks }
+  return {
+    id,
+    letter,
+    state,
+    latest: isLatest,
+    sha256,
+    putForwardBy: putForwardByName,
+    putForwardAt: at.toISOString(),
+    openRemarks,
+  }
 }
 
 const presentDecision = ({ kind, personName, typedName, statement, sha256, at }: Decision): DecisionView => ({

@@ -19,7 +19,12 @@ export const decideIssue = (
   request: OutputOf<typeof DecisionRequest>,
 ): Promise<string> =>
   inTransaction(async (tx) => {
-    const { issue, commission, isLatest } = await requireIssue(issueId, { actor, right: 'issue.decide', tx, lock: true })
+    const { issue, commission, isLatest } = await requireIssue(issueId, {
+      actor,
+      right: 'issue.decide',
+      tx,
+      lock: true,
+    })
     const { operationId, kind, typedName, statement, sha256 } = request
     const asked = { what: 'decision', issueId, kind, typedName, statement, sha256 }
     return onceOnly(tx, { operationId, actor, request: asked }, async () => {
@@ -36,7 +41,16 @@ export const decideIssue = (
       }
       await issue.update({ state: nextState(ISSUE_COURSE, issue.state, kind) }, { transaction: tx })
       const decision = await Decision.create(
-        { issueId, kind, personId: actor.personId, personName: actor.name, typedName, statement, sha256, at: now() },
+        {
+          issueId,
+          kind,
+          personId: actor.personId,
+          personName: actor.name,
+          typedName,
+          statement,
+          sha256,
+          at: now(),
+        },
         { transaction: tx },
       )
       await enterTrail(tx, {

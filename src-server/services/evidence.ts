@@ -10,7 +10,14 @@ export async function evidenceOf(tx: Tx, commissionId: string): Promise<Evidence
   return {
     pictures: pictures.flatMap(({ picture, measurement }) =>
       picture.state === 'open' && measurement !== null
-        ? [{ name: picture.name, copies: picture.copies, measurementNo: measurement.no, measurement: measurement.document }]
+        ? [
+            {
+              name: picture.name,
+              copies: picture.copies,
+              measurementNo: measurement.no,
+              measurement: measurement.document,
+            },
+          ]
         : [],
     ),
     photographs: photographs

@@ -35,7 +35,10 @@ export interface IssueWithRemarks {
 export async function listIssues(actor: Actor, commissionId: string): Promise<IssueWithRemarks[]> {
   await requireCommission(commissionId, { actor, right: 'issue.read', see: 'commission.read' })
   const issues = await Issue.findAll({ where: { commissionId }, order: [['no', 'DESC']] })
-  const open = await Remark.findAll({ where: { issueId: issues.map(({ id }) => id), state: 'open' }, attributes: ['issueId'] })
+  const open = await Remark.findAll({
+    where: { issueId: issues.map(({ id }) => id), state: 'open' },
+    attributes: ['issueId'],
+  })
   return issues.map((issue, index) => ({
     issue,
     isLatest: index === 0,
@@ -58,7 +61,10 @@ export async function readIssue(actor: Actor, id: string): Promise<WholeIssue> {
     ...reached,
     section: sectionOfIssue(issue),
     decisions: await Decision.findAll({ where: { issueId: id }, order: [['at', 'ASC']] }),
-    remarks: remarks.map((remark) => ({ remark, entries: entries.filter(({ remarkId }) => remarkId === remark.id) })),
+    remarks: remarks.map((remark) => ({
+      remark,
+      entries: entries.filter(({ remarkId }) => remarkId === remark.id),
+    })),
     photographIds: await photographIdsOf(issue),
   }
 }
@@ -71,7 +77,9 @@ async function photographIdsOf({ commissionId, evidence }: Issue): Promise<Reado
   })
   return new Map(
     evidence.photographs.flatMap(({ key, sha256 }) => {
-      const same = photographs.find((photograph) => photograph.key === key && photograph.file?.sha256 === sha256)
+      const same = photographs.find(
+        (photograph) => photograph.key === key && photograph.file?.sha256 === sha256,
+      )
       return same === undefined ? [] : [[key, same.id] as const]
     }),
   )

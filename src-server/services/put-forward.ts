@@ -36,7 +36,12 @@ export const putForward = (
   request: OutputOf<typeof PutForwardRequest>,
 ): Promise<string> =>
   inTransaction(async (tx) => {
-    const commission = await requireCommission(commissionId, { actor, right: 'issue.put-forward', tx, lock: true })
+    const commission = await requireCommission(commissionId, {
+      actor,
+      right: 'issue.put-forward',
+      tx,
+      lock: true,
+    })
     const { operationId, ...asked } = request
     return onceOnly(tx, { operationId, actor, request: { what: 'issue', commissionId, ...asked } }, () =>
       enterIssue(tx, actor, commission, request),
@@ -54,7 +59,11 @@ async function enterIssue(
   const section = sectionFromDraft(draft.document)
   requireReady(section)
   const evidence = await evidenceOf(tx, commission.id)
-  const earlier = await Issue.findAll({ where: { commissionId: commission.id }, transaction: tx, lock: tx.LOCK.UPDATE })
+  const earlier = await Issue.findAll({
+    where: { commissionId: commission.id },
+    transaction: tx,
+    lock: tx.LOCK.UPDATE,
+  })
   const no = earlier.length
   const text = issueTextOf(section)
   const issue = await Issue.create(
@@ -83,9 +92,20 @@ async function enterIssue(
     actor,
     act: 'issue-put-forward',
     says: `Put forward issue ${issue.letter}`,
-    document: { issueId: issue.id, letter: issue.letter, sha256: issue.sha256, evidenceSha256: issue.evidenceSha256 },
+    document: {
+      issueId: issue.id,
+      letter: issue.letter,
+      sha256: issue.sha256,
+      evidenceSha256: issue.evidenceSha256,
+    },
   })
-  await settleOpenOrders(tx, { actor, commission, issue, earlierIds: earlier.map(({ id }) => id), openOrders })
+  await settleOpenOrders(tx, {
+    actor,
+    commission,
+    issue,
+    earlierIds: earlier.map(({ id }) => id),
+    openOrders,
+  })
   await tellCuratorsOfIssue(tx, { commission, issue })
   return issue.id
 }

@@ -47,7 +47,11 @@ export const answerRemark = (
     const { issue } = await requireIssue(found.issueId, { actor, right: 'remark.add', tx, lock: true })
     const request = { what: 'remark-entry', remarkId, text, state }
     await onceOnly(tx, { operationId, actor, request }, async () => {
-      const remark = await Remark.findByPk(remarkId, { transaction: tx, lock: tx.LOCK.UPDATE, rejectOnEmpty: true })
+      const remark = await Remark.findByPk(remarkId, {
+        transaction: tx,
+        lock: tx.LOCK.UPDATE,
+        rejectOnEmpty: true,
+      })
       await addEntry(tx, actor, remarkId, text)
       await remark.update({ state }, { transaction: tx })
       await enterTrail(tx, {

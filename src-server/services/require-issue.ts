@@ -41,7 +41,9 @@ export async function requireIssue(id: string, options: IssueReach): Promise<Rea
   requireSeen(actor, see, facts)
   requireRight(actor, right, facts)
   // Read again once the commission is held: the state may have moved while waiting for it.
-  const issue = held ? await Issue.findByPk(id, { ...inside, lock: tx.LOCK.UPDATE, rejectOnEmpty: true }) : found
+  const issue = held
+    ? await Issue.findByPk(id, { ...inside, lock: tx.LOCK.UPDATE, rejectOnEmpty: true })
+    : found
   const later = await Issue.count({ where: { commissionId: commission.id }, ...inside })
   return { issue, commission, isLatest: issue.no === later - 1 }
 }
