@@ -1,7 +1,7 @@
 import { openDataFolder, readRecord } from './data-folder.mjs'
 import { ensureBuild } from './build.mjs'
 import { ensureContents } from './contents.mjs'
-import { USUAL_PORTS, environmentFor } from './environment.mjs'
+import { USUAL_PORTS, environmentFor, requireAddress } from './environment.mjs'
 import { keyOfDatabase, openInstallation } from './installation.mjs'
 import { forgetChildren, rememberChildren, stopLeftovers } from './leftovers.mjs'
 import { ensureDatabase, initialiseMariaDb, startMariaDb } from './mariadb.mjs'
@@ -30,6 +30,7 @@ export async function bringUp(settings, { onOpen }) {
   const left = await stopLeftovers(childrenFile)
   if (left.length > 0) say(`Stopped what an earlier start left running: ${left.join(', ')}.`)
   onOpen(() => forgetChildren(childrenFile))
+  await requireAddress(settings)
   const children = []
   const stays = (child) => {
     children.push(child)

@@ -26,12 +26,20 @@ export async function environmentFor({ settings, data, installation }, databaseU
 }
 
 async function applicationPort({ host, port: given }, { record, keep }) {
-  const port = given ?? (await firstFreePort([record.port, USUAL_PORTS.application], host))
-  if (!(await isPortFree(port, host))) {
-    throw new Refusal(`Port ${port} at ${host} is taken or not allowed; give another in LISTEL_PORT.`)
-  }
-  if (given === undefined) keep({ port })
+  if (given !== undefined) return given
+  const port = await firstFreePort([record.port, USUAL_PORTS.application], host)
+  keep({ port })
   return port
+}
+
+/** Asked before anything is begun: an address that cannot be listened on is told at once. */
+export async function requireAddress({ host, port }) {
+  if (await isPortFree(port ?? 0, host)) return
+  throw new Refusal(
+    port === undefined
+      ? `${host} is not an address of this machine; give another in LISTEL_HOST.`
+      : `Port ${port} at ${host} is taken or not allowed; give another in LISTEL_PORT.`,
+  )
 }
 
 /** What the links in letters begin with: reachable from other devices where those can reach the product. */

@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs'
 import { connect } from 'node:net'
 import { networkInterfaces } from 'node:os'
 import { join } from 'node:path'
@@ -61,7 +62,8 @@ export async function waitFor(child, isReady, { log, withinMs = 60_000 }) {
     await pause(50)
   }
   const how = child.hasEnded ? 'ended at once' : `was not ready within ${withinMs / 1000} seconds`
-  throw new Refusal(`The ${child.name} ${how}; its own words are in ${log}`)
+  const words = lastLinesOf(readFileSync(log, 'utf8'), 2)
+  throw new Refusal(`The ${child.name} ${how}: ${words} (whole text in ${log})`)
 }
 
 /** Whether the address answers 200. */

@@ -40,7 +40,6 @@ const chainRows: readonly Row[] = CHAIN.flatMap((group, place) =>
 const packageHolders: Readonly<Record<string, string>> = {
   'shared/geometry/polygons.ts': 'clipper-lib',
   'shared/section/digest.ts': '@noble/hashes',
-  'shared/cutting/solver.ts': 'highs',
   'shared/sheet/pdf.ts': 'jspdf',
 }
 
@@ -58,7 +57,7 @@ const ROWS: readonly Row[] = [
   {
     of: /^src\/(stores|composables)\//,
     may: [src('api', 'board', 'stores', 'composables'), anyShared],
-    packages: VUE,
+    packages: [...VUE, 'uuid'],
   },
   { of: /^src\/components\//, may: [src('composables', 'stores'), anyShared], packages: VUE },
   {
@@ -76,7 +75,7 @@ const ROWS: readonly Row[] = [
   },
   {
     of: /^src-server\/services\//,
-    may: [server('models', 'mail/outbox', 'files'), anyShared],
+    may: [server('models', 'mail/outbox', 'files', 'migrations/migrator'), anyShared],
     packages: ['sequelize', 'argon2', 'sharp', 'uuid', 'jsonwebtoken'],
     node: true,
   },
@@ -86,7 +85,7 @@ const ROWS: readonly Row[] = [
   { of: /^src-server\/files\//, may: [server('models'), anyShared], packages: 'any', node: true },
   {
     of: /^src-server\/(middleware|mail|seeds)\//,
-    may: [server('models', 'services', 'files', 'mail', 'config'), anyShared],
+    may: [server('models', 'services', 'files', 'mail', 'config', 'routes/route'), anyShared],
     packages: 'any',
     node: true,
   },
