@@ -75,7 +75,7 @@ const ROWS: readonly Row[] = [
   },
   {
     of: /^src-server\/services\//,
-    may: [server('models', 'mail/outbox', 'files', 'migrations/migrator'), anyShared],
+    may: [server('models', 'mail/outbox', 'mail/letters[a-z-]*', 'files', 'migrations/migrator'), anyShared],
     packages: ['sequelize', 'argon2', 'sharp', 'uuid', 'jsonwebtoken'],
     node: true,
   },

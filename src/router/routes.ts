@@ -1,0 +1,146 @@
+import type { RouteRecordRaw } from 'vue-router'
+import { COMMISSION_ROUTE } from './commission-routes'
+
+const OPEN_ROUTES: RouteRecordRaw[] = [
+  {
+    path: 'sign-in',
+    name: 'sign-in',
+    component: () => import('@/pages/SignInPage.vue'),
+    meta: { title: 'Sign in', open: true },
+  },
+  {
+    path: 'welcome/:token',
+    name: 'welcome',
+    component: () => import('@/pages/WelcomePage.vue'),
+    props: true,
+    meta: { title: 'Welcome', open: true },
+  },
+  {
+    path: 'link/:token',
+    name: 'link',
+    component: () => import('@/pages/LinkPage.vue'),
+    props: true,
+    meta: { title: 'Knife order', open: true },
+  },
+  {
+    path: 'out-of-reach',
+    name: 'out-of-reach',
+    component: () => import('@/pages/OutOfReachPage.vue'),
+    meta: { title: 'Out of reach', open: true },
+  },
+]
+
+const WORKSHOP_ROUTES: RouteRecordRaw[] = [
+  {
+    path: '',
+    name: 'waiting',
+    component: () => import('@/pages/WaitingPage.vue'),
+    meta: { title: 'What waits for you' },
+  },
+  {
+    path: 'commissions',
+    name: 'commissions',
+    component: () => import('@/pages/CommissionsPage.vue'),
+    meta: { title: 'Commissions', right: 'commission.list' },
+  },
+  {
+    path: 'commissions/new',
+    name: 'new-commission',
+    component: () => import('@/pages/NewCommissionPage.vue'),
+    meta: { title: 'New commission', right: 'commission.manage' },
+  },
+  {
+    path: 'orders',
+    name: 'orders',
+    component: () => import('@/pages/OrdersPage.vue'),
+    meta: { title: 'Knife orders', right: 'order.list' },
+  },
+  {
+    path: 'orders/:id',
+    name: 'order',
+    component: () => import('@/pages/OrderPage.vue'),
+    props: true,
+    meta: { title: 'Knife order', right: 'order.list' },
+  },
+  {
+    path: 'cut-lists',
+    name: 'cut-lists',
+    component: () => import('@/pages/CutListsPage.vue'),
+    meta: { title: 'Bench', right: 'cut-list.list' },
+  },
+  {
+    path: 'rack',
+    name: 'rack',
+    component: () => import('@/pages/RackPage.vue'),
+    meta: { title: 'Rack', right: 'rack.read' },
+  },
+  {
+    path: 'people',
+    name: 'people',
+    component: () => import('@/pages/PeoplePage.vue'),
+    meta: { title: 'People', right: 'people.manage' },
+  },
+  {
+    path: 'clients',
+    name: 'clients',
+    component: () => import('@/pages/ClientsPage.vue'),
+    meta: { title: 'Clients', right: 'client.manage' },
+  },
+  {
+    path: 'mills',
+    name: 'mills',
+    component: () => import('@/pages/MillsPage.vue'),
+    meta: { title: 'Mills', right: 'mill.read' },
+  },
+  {
+    path: 'mills/:id',
+    name: 'mill',
+    component: () => import('@/pages/MillPage.vue'),
+    props: true,
+    meta: { title: 'Mill', right: 'mill.read' },
+  },
+  {
+    path: 'post',
+    name: 'post',
+    component: () => import('@/pages/PostPage.vue'),
+    meta: { title: 'Post', right: 'post.read' },
+  },
+  {
+    path: 'post/:id',
+    name: 'letter',
+    component: () => import('@/pages/LetterPage.vue'),
+    props: true,
+    meta: { title: 'Letter', right: 'post.read' },
+  },
+  {
+    path: 'settings',
+    name: 'settings',
+    component: () => import('@/pages/SettingsPage.vue'),
+    meta: { title: 'Settings', right: 'settings.change' },
+  },
+  {
+    path: ':rest(.*)*',
+    name: 'not-found',
+    component: () => import('@/pages/NotFoundPage.vue'),
+    meta: { title: 'Nothing here' },
+  },
+]
+
+export const ROUTES: RouteRecordRaw[] = [
+  { path: '/', component: () => import('@/layouts/PlainLayout.vue'), children: OPEN_ROUTES },
+  COMMISSION_ROUTE,
+  {
+    path: '/cut-lists/:id',
+    component: () => import('@/layouts/BenchLayout.vue'),
+    children: [
+      {
+        path: '',
+        name: 'cut-list',
+        component: () => import('@/pages/CutListPage.vue'),
+        props: true,
+        meta: { title: 'Bench', right: 'cut-list.read' },
+      },
+    ],
+  },
+  { path: '/', component: () => import('@/layouts/WorkshopLayout.vue'), children: WORKSHOP_ROUTES },
+]
