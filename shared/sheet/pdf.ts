@@ -20,7 +20,7 @@ export interface PdfOptions {
 
 const FONT_FAMILY = 'WorkSans'
 const STYLES: Record<Weight, string> = { regular: 'normal', semibold: 'bold' }
-const GREYS: Record<Tone, number> = { ink: 0, grey: 136, pale: 232, white: 255 }
+const GREYS: Record<Tone, number> = { ink: 0, grey: 150, pale: 232, white: 255 }
 const POINTS_PER_MM = 72 / 25.4
 /** Widest stretch of a circle drawn as one cubic: at π/8 the cubic leaves the circle by less than 10⁻⁷ of its radius. */
 const WIDEST_CUBIC_RAD = Math.PI / 8

@@ -9,6 +9,8 @@ export interface LengthPrinter {
   /** How finely the numbers are written, as a sentence. */
   readonly grain: string
   readonly length: (mm: number) => string
+  /** A thickness or a tolerance so small that a 64th of an inch would falsify it: decimals in either unit. */
+  readonly small: (mm: number) => string
   /** The ± about 95 % of a dimension whose standard deviation is given, mm. */
   readonly plusMinus: (standardDeviationMm: number) => string
 }
@@ -26,6 +28,7 @@ export function lengthPrinterOf(unit: LengthUnit, shown: readonly number[]): Len
       unitName: 'inches',
       grain: `Written to the nearest 1/${INCH_FRACTION} in; the DXF holds every size in full.`,
       length: (mm) => printLength(mm, { unit: 'in', fraction: INCH_FRACTION, withUnit: false }),
+      small: (mm) => printNumber(mm / MM_PER_INCH, 3),
       plusMinus: (standardDeviationMm) =>
         `± ${printNumber(plusMinus95(standardDeviationMm) / MM_PER_INCH, 3)}`,
     }
@@ -36,6 +39,7 @@ export function lengthPrinterOf(unit: LengthUnit, shown: readonly number[]): Len
     unitName: 'mm',
     grain: `Written to ${places === 1 ? '0.1' : '0.01'} mm; the DXF holds every size in full.`,
     length: (mm) => printLength(mm, { unit: 'mm', places, withUnit: false }),
+    small: (mm) => printNumber(mm, places),
     plusMinus: (standardDeviationMm) => `± ${printNumber(plusMinus95(standardDeviationMm), places)}`,
   }
 }

@@ -9,7 +9,7 @@ import { labelTargetOf, memberLabelsAbove } from './member-labels'
 import type { MemberLabel } from './member-labels'
 import { curveText } from './member-text'
 import { ordinatesBeside } from './ordinates'
-import type { Ordinate } from './ordinates'
+import type { Ordinate, Ordinates } from './ordinates'
 import { pathOnPaper } from './placement'
 import type { LengthPrinter } from './printing'
 
@@ -38,17 +38,36 @@ export function sectionViewOf(section: Section, printer: LengthPrinter, scale: n
   )
   const values = ordinateValues(section, printer, scale, isTabulated)
   const below = ordinatesBeside('below', values.below, min.y)
-  const left = ordinatesBeside('left', values.left, min.x)
-  const right = ordinatesBeside('right', values.right, max.x)
   const labels = memberLabelsAbove(labelsOf(section, printer, scale, isTabulated), max.y)
+  const spreadFrom = Math.min(min.x, below.from, labels.from)
+  const spreadTo = Math.max(max.x, below.to, labels.to)
+  const left = ordinatesClearOf('left', values.left, [min.x, spreadFrom], [min.y, max.y])
+  const right = ordinatesClearOf('right', values.right, [max.x, spreadTo], [min.y, max.y])
   return {
     items: [...shape, ...below.items, ...left.items, ...right.items, ...labels.items],
-    left: Math.min(min.x - left.reachMm, below.from, labels.from),
-    right: Math.max(max.x + right.reachMm, below.to, labels.to),
+    left: Math.min(left.edge, spreadFrom),
+    right: Math.max(right.edge, spreadTo),
     bottom: Math.min(min.y - below.reachMm, left.from, right.from),
     top: Math.max(max.y + labels.reachMm, left.to, right.to),
     isTabulated,
   }
+}
+
+/** Heights of values that reach this far above or below the drawing would come among the labels there, mm. */
+const CORNER_MM = 2
+
+/** Values at a side; where they spread higher or lower than the drawing they stand outside of what is above and below it. */
+function ordinatesClearOf(
+  side: 'left' | 'right',
+  values: readonly Ordinate[],
+  [near, far]: readonly [number, number],
+  [lowest, highest]: readonly [number, number],
+): Ordinates & { readonly edge: number } {
+  const close = ordinatesBeside(side, values, near)
+  const staysBetween = close.from > lowest - CORNER_MM && close.to < highest + CORNER_MM
+  const limit = staysBetween ? near : far
+  const placed = staysBetween ? close : ordinatesBeside(side, values, far)
+  return { ...placed, edge: limit + (side === 'left' ? -placed.reachMm : placed.reachMm) }
 }
 
 function shapeItems(section: Section, scale: number): DrawingItem[] {
@@ -102,19 +121,20 @@ function ordinateValues(
   const { rebate, backSplay } = section
   const low = (x: number): Point => ({ x, y: 0 })
   const hasSplay = backSplay.x > 0 && backSplay.height > 0
+  const hasRebate = rebate.width > 0 && rebate.depth > 0
   const widest = max.x > last.x ? [extremePoint(path, 'x')] : []
   const highest = [extremePoint(path, 'y')]
   const onX = [
     ...shown,
     ...widest,
-    low(rebate.width),
-    ...(hasSplay ? [low(max.x - backSplay.x)] : []),
+    ...(hasRebate ? [low(rebate.width)] : []),
+    ...(hasSplay ? [low(last.x - backSplay.x)] : []),
     low(min.x),
   ]
   const onLeft = [
     { x: 0, y: first.y },
-    { x: 0, y: rebate.depth },
-    { x: rebate.width, y: 0 },
+    ...(hasRebate ? [{ x: 0, y: rebate.depth }] : []),
+    { x: hasRebate ? rebate.width : 0, y: 0 },
   ]
   const onRight = [...shown.slice(1), ...highest, ...(hasSplay ? [{ x: last.x, y: backSplay.height }] : [])]
   const left = distinctOrdinates(onLeft, 'y', printer, scale)
@@ -172,7 +192,7 @@ function labelsOf(
     const [onPaper] = pathOnPaper([pointed], NOWHERE, scale)
     if (onPaper === undefined) return []
     const radius = isTabulated ? '' : radiusText(member, segments, section, index, printer)
-    return [{ ...labelTargetOf(onPaper), text: radius === '' ? `${number}` : `${number}   ${radius}` }]
+    return [{ ...labelTargetOf(onPaper), text: radius === '' ? `${number}` : `${number}: ${radius}` }]
   })
 }
 

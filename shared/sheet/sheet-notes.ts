@@ -44,16 +44,16 @@ export function sectionRows(
       text: `${length(wood.leastWood.thicknessMm)} between ${wordOf(vocabulary, 'rebate')} and face`,
     },
     { label: 'blank, run flat', text: blankText(wood.blank, printer) },
-    { label: 'tolerance', text: `± ${length(tolerance)} on the wood section` },
+    { label: 'tolerance', text: `± ${printer.small(tolerance)} on the wood section` },
     { label: 'figures', text: printer.grain },
   ]
 }
 
-function gessoText(gesso: SheetInput['section']['gesso'], { length }: LengthPrinter): string {
+function gessoText(gesso: SheetInput['section']['gesso'], { small }: LengthPrinter): string {
   if (typeof gesso === 'number')
-    return gesso === 0 ? 'none' : `${length(gesso)} over the whole face, allowed for in the wood`
+    return gesso === 0 ? 'none' : `${small(gesso)} over the whole face, allowed for in the wood`
   if (gesso.length === 0) return 'none'
-  const stretches = gesso.map(({ from, to, thickness }) => `${length(thickness)} from break ${from} to ${to}`)
+  const stretches = gesso.map(({ from, to, thickness }) => `${small(thickness)} from break ${from} to ${to}`)
   return `${stretches.join(', ')}; allowed for in the wood`
 }
 

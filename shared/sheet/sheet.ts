@@ -119,6 +119,7 @@ interface Layout {
   readonly view: SectionView
   /** Of the view's own extents, heading excluded. */
   readonly viewCorner: Point
+  readonly headingTop: number
   readonly blocks: readonly { readonly block: Block; readonly corner: Point }[]
   readonly tableCorner: Point
   readonly rowsShown: number
@@ -150,6 +151,7 @@ function arrangedInOneColumn(attempt: Attempt): Layout | undefined {
   if (!fits) return undefined
   return {
     ...{ paper, scale, view },
+    headingTop: viewTop + VIEW_HEADING_MM,
     viewCorner: { x: centred(left, widthMm, viewWidth(view)), y: viewTop },
     blocks: [
       { block: notes, corner: { x: left, y: notesTop } },
@@ -179,11 +181,13 @@ function arrangedBeside(attempt: Attempt): Layout | undefined {
   const barTop = space.bottom + INSET_MM + bar.heightMm
   const notesTop = barTop + GAP_MM + notes.heightMm
   const rowsShown = rowsInRightColumn(attempt, space, space.top - INSET_MM)
-  const fits = viewWidth(view) <= widthMm && viewTop - viewHeight(view) - GAP_MM >= notesTop
+  const slack = viewTop - viewHeight(view) - GAP_MM - notesTop
+  const fits = viewWidth(view) <= widthMm && slack >= 0
   if (!fits || bar.widthMm > widthMm || rowsShown === undefined) return undefined
   return {
     ...{ paper, scale, view, rowsShown },
-    viewCorner: { x: centred(left, widthMm, viewWidth(view)), y: viewTop },
+    headingTop: viewTop + VIEW_HEADING_MM,
+    viewCorner: { x: centred(left, widthMm, viewWidth(view)), y: viewTop - slack / 2 },
     blocks: [
       { block: notes, corner: { x: left, y: notesTop } },
       { block: bar, corner: { x: left, y: barTop } },
@@ -208,6 +212,7 @@ function arrangedAbove(attempt: Attempt): Layout | undefined {
   if (!fits || bar.widthMm > widthMm || rowsShown === undefined) return undefined
   return {
     ...{ paper, scale, view, rowsShown },
+    headingTop: viewTop + VIEW_HEADING_MM,
     viewCorner: { x: centred(left, fullMm, viewWidth(view)), y: viewTop },
     blocks: [
       { block: notes, corner: { x: left, y: under } },
@@ -273,10 +278,9 @@ function shoutItems(input: SheetInput, paper: Paper): DrawingItem[] {
   return [textItem('notes', at, text, LETTER_MM.shout, { weight: 'semibold', tone: 'grey' })]
 }
 
-function headingItems({ viewCorner, view, scale, paper }: Layout, printer: LengthPrinter): DrawingItem[] {
+function headingItems({ headingTop: y, view, scale, paper }: Layout, printer: LengthPrinter): DrawingItem[] {
   const { left } = drawingSpaceOf(paper)
   const x = left + INSET_MM
-  const y = viewCorner.y + VIEW_HEADING_MM
   const where = 'x from the sight edge outward, y from the flat back'
   const tabled = view.isTabulated ? '; the breaks between are in the table' : ''
   return [

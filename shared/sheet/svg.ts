@@ -5,7 +5,7 @@ import { dashPattern } from './drawing'
 import type { Dash, Drawing, DrawingItem, LinesItem, PathItem, TextItem, Tone } from './drawing'
 import { emOf, plainLine } from './lettering'
 
-const TONES: Record<Tone, string> = { ink: '#000', grey: '#888', pale: '#e8e8e8', white: '#fff' }
+const TONES: Record<Tone, string> = { ink: '#000', grey: '#969696', pale: '#e8e8e8', white: '#fff' }
 const WEIGHTS: Record<TextItem['weight'], number> = { regular: 400, semibold: 600 }
 const ANCHORS: Record<TextItem['anchor'], string> = { start: 'start', middle: 'middle', end: 'end' }
 

@@ -36,7 +36,7 @@ export interface TitleBlockFacts {
 const PADDING_MM = 1.5
 /** From a cell's top down to the foot of its label, and to the top of its value. */
 const LABEL_DROP_MM = 1 + LETTER_MM.small
-const VALUE_DROP_MM = LABEL_DROP_MM + 1.3
+const VALUE_DROP_MM = LABEL_DROP_MM + 1.7
 const VALUE_PITCH = 1.7
 
 /** Heights of the rows from the top, mm; on every sheet alike. */
