@@ -31,7 +31,9 @@ export { SECTION_DEFAULTS, withDefaults } from './defaults'
 export type { PartialMember, PartialSection } from './defaults'
 export { faceOf } from './face'
 export type { Face } from './face'
-export { outlineOf } from './outline'
+export { woodFaceOf } from './wood-face'
+export type { SwallowedMember, WoodFace } from './wood-face'
+export { outlineOf, woodOutlineOf } from './outline'
 export { canonicalText } from './canonical'
 export { sha256Hex } from './digest'
 export { issueTextOf, plainSectionOf, sectionSha256 } from './issue-text'
@@ -40,3 +42,14 @@ export { applyEdit } from './edit'
 export type { AppliedEdit, SectionEdit, SetEdit } from './edit'
 export { basisCountsOf, missingBasisOf } from './basis'
 export type { BasisCounts } from './basis'
+export { girthOf, measuresOf } from './measures'
+export type {
+  MemberMeasures,
+  MemberRadius,
+  OutlineMeasures,
+  SecondMoments,
+  SectionMeasures,
+  WoodMeasures,
+} from './measures'
+export type { SectionBlank } from './blank'
+export type { LeastWood } from './least-wood'

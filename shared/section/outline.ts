@@ -1,6 +1,7 @@
 import type { LineSegment, Outline, Path, Point } from '@shared/geometry'
 import { faceOf } from './face'
 import type { Section } from './document'
+import { woodFaceOf } from './wood-face'
 
 /**
  * The closed outline of a section with its finished face, in this order: face from the sight edge outward, back edge down (with its splay),
@@ -8,6 +9,9 @@ import type { Section } from './document'
  * Sides of no length are left out. A rebate without width or depth is none.
  */
 export const outlineOf = (section: Section): Outline => outlineWith(section, faceOf(section).path)
+
+/** The same outline with the wood face: what the mill cuts. */
+export const woodOutlineOf = (section: Section): Outline => outlineWith(section, woodFaceOf(section).path)
 
 /** The outline round any face of a section that starts on its sight edge and ends on its back edge. */
 export function outlineWith(section: Section, face: Path): Outline {
