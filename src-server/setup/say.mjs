@@ -1,3 +1,5 @@
+import { stripVTControlCharacters } from 'node:util'
+
 /**
  * A reason to stop that the person at the terminal can act on. Shown as one line without a stack;
  * anything else that is thrown is a defect and is shown whole.
@@ -26,12 +28,15 @@ export function sayFault(fault) {
   process.stderr.write(`${text}\n`)
 }
 
-/** The last lines of a text that say something, for a fault line: blank lines and npm's own chatter are left out. */
+/** Lines that tell a person nothing: blank ones, npm's own chatter, the rungs of a stack. */
+const SAYS_NOTHING = /^$|^npm notice|^at |^\{$|^\}$|^errors: \[/
+
+/** The last lines of a text that say something, joined for a fault line; terminal colours are taken out. */
 export function lastLinesOf(text, count = 3) {
-  return text
+  return stripVTControlCharacters(text)
     .split('\n')
     .map((line) => line.trim())
-    .filter((line) => line !== '' && !line.startsWith('npm notice'))
+    .filter((line) => !SAYS_NOTHING.test(line))
     .slice(-count)
     .join(' / ')
 }

@@ -11,6 +11,7 @@ import { keyOfDatabase, openInstallation } from '@server/setup/installation.mjs'
 import { rememberChildren, stopLeftovers } from '@server/setup/leftovers.mjs'
 import { requireNode } from '@server/setup/packages.mjs'
 import { firstFreePort, isPortFree } from '@server/setup/ports.mjs'
+import { lastLinesOf } from '@server/setup/say.mjs'
 import { readSettings } from '@server/setup/settings.mjs'
 import { findProgram } from '@server/setup/system-programs.mjs'
 
@@ -171,5 +172,15 @@ describe('ports and programs', () => {
     expect(findProgram('program', ['', folder])).toBeUndefined()
     spawnSync('chmod', ['700', file])
     expect(findProgram('program', ['/nowhere', folder])).toBe(file)
+  })
+})
+
+describe('the last words of a program', () => {
+  it('are the lines that tell something, without colours and stacks', () => {
+    const text =
+      'vite\n\n\u001b[31m[UNRESOLVED_ENTRY] \u001b[0mno index.html\n    at build (node.js:1:2)\nnpm notice New!\n'
+    expect(lastLinesOf(text, 1)).toBe('[UNRESOLVED_ENTRY] no index.html')
+    expect(lastLinesOf(text)).toBe('vite / [UNRESOLVED_ENTRY] no index.html')
+    expect(lastLinesOf('\n')).toBe('')
   })
 })
