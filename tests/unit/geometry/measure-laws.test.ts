@@ -211,11 +211,10 @@ describe('bounds', () => {
           Array.from({ length: 401 }, (_, i) => pointAt(segment, i / 400)),
         )
         const slack = 1e-12 * sizeOf(path)
-        for (const { x, y } of points) {
-          expect(x >= min.x - slack && x <= max.x + slack && y >= min.y - slack && y <= max.y + slack).toBe(
-            true,
-          )
-        }
+        const isInside = points.every(
+          ({ x, y }) => x >= min.x - slack && x <= max.x + slack && y >= min.y - slack && y <= max.y + slack,
+        )
+        expect(isInside).toBe(true)
         const coarse = 1e-2 * sizeOf(path)
         expectWithin(Math.min(...points.map((p) => p.x)), min.x, { withinMm: coarse })
         expectWithin(Math.max(...points.map((p) => p.y)), max.y, { withinMm: coarse })
