@@ -17,7 +17,7 @@ export function staticClient(clientDir: string): Router {
   // Every other address is a page of the client, which finds its own way; a missing asset is just missing.
   router.get('/{*rest}', (request, response, next) => {
     if (request.path.startsWith('/assets/')) return next()
-    response.set('Cache-Control', 'no-store').sendFile(join(clientDir, 'index.html'))
+    response.set('Cache-Control', 'no-store').sendFile('index.html', { root: clientDir })
   })
   return router
 }
