@@ -1,5 +1,5 @@
 import type { Request, Response, Router } from 'express'
-import { isEverGranted } from '@shared/access'
+import { can, isEverGranted } from '@shared/access'
 import type { Actor } from '@shared/access'
 import type { RawCall, Route } from '../routes/route'
 import { notFound, rightMissing } from '../services/rights'
@@ -40,11 +40,14 @@ export function mount(router: Router, route: Route, options: MountOptions): void
   })
 }
 
-/** Turns away whoever has the right for no row whatever; row rules are the services' to ask. */
+/**
+ * Turns away whoever has the right for no row whatever. Where it hangs on the row whether the thing may even be seen,
+ * the service decides between 403 and 404: it alone knows the row.
+ */
 function requireDoor({ right, see }: Route, actor: Actor): void {
   if (right === 'public' || isEverGranted(actor, right)) return
-  if (see !== undefined && isEverGranted(actor, see)) throw rightMissing(right)
-  throw notFound()
+  if (see === undefined || !isEverGranted(actor, see)) throw notFound()
+  if (can(actor, see)) throw rightMissing(right)
 }
 
 async function readBody(route: Route, request: Request, response: Response) {
