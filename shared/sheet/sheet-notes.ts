@@ -57,9 +57,13 @@ function gessoText(gesso: SheetInput['section']['gesso'], { small }: LengthPrint
   return `${stretches.join(', ')}; allowed for in the wood`
 }
 
-function blankText(blank: SheetInput['measures']['wood']['blank'], { length }: LengthPrinter): string {
-  const tilt = blank.tiltDeg === 0 ? '' : `, tilted ${blank.tiltDeg.toFixed(1)}°`
-  return `${length(blank.widthMm)} × ${length(blank.thicknessMm)} at the least, before any machining allowance${tilt}`
+function blankText(
+  { flat, widthMm, thicknessMm, tiltDeg }: SheetInput['measures']['wood']['blank'],
+  { length }: LengthPrinter,
+): string {
+  const size = `${length(flat.widthMm)} × ${length(flat.thicknessMm)} at the least, before any machining allowance`
+  if (tiltDeg === 0) return size
+  return `${size}; ${length(widthMm)} × ${length(thicknessMm)} if run tilted by ${tiltDeg.toFixed(1)}°`
 }
 
 /** What is asked of the mill, as far as it is said. */

@@ -1,10 +1,12 @@
 import { Failure } from '@shared/failure'
 import type { Point } from '@shared/geometry'
+import { woodFaceOf } from '@shared/section'
 import { hungAt } from './block'
 import type { Block } from './block'
 import { continuationPages } from './continuation'
 import { LETTER_MM, textItem } from './drawing'
 import type { Drawing, DrawingItem, ModelPlacement } from './drawing'
+import { radiiOf } from './member-text'
 import { memberRowsOf, memberTable, rowsThatFit, tableHeightMm } from './member-table'
 import type { MemberRow } from './member-table'
 import { modelNotes } from './model-notes'
@@ -62,19 +64,25 @@ export function sheetOf(input: SheetInput): Drawing {
 /** Everything that will be printed of the section decides together how many places its numbers have. */
 function printerFor({ unit, section, measures }: SheetInput): LengthPrinter {
   const { wood } = measures
-  const shown = section.members.flatMap(({ width, rise }) => [width, rise])
+  const { path, breaks } = woodFaceOf(section)
   const gesso =
     typeof section.gesso === 'number' ? [section.gesso] : section.gesso.map(({ thickness }) => thickness)
   const { rebate, backSplay } = section
-  const others = [
-    section.sightEdgeHeight,
-    rebate.width,
-    rebate.depth,
-    backSplay.x,
-    backSplay.height,
-    section.tolerance,
-  ]
-  return lengthPrinterOf(unit, [...shown, ...gesso, ...others, wood.widthMm, wood.depthMm, wood.lipMm])
+  return lengthPrinterOf(unit, [
+    ...section.members.flatMap(({ width, rise }) => [width, rise]),
+    ...breaks.flatMap(({ x, y }) => [x, y]),
+    ...radiiOf(path),
+    ...gesso,
+    ...[
+      section.sightEdgeHeight,
+      section.tolerance,
+      rebate.width,
+      rebate.depth,
+      backSplay.x,
+      backSplay.height,
+    ],
+    ...[wood.widthMm, wood.depthMm, wood.lipMm],
+  ])
 }
 
 interface Parts {
