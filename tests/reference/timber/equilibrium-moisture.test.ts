@@ -29,4 +29,20 @@ describe('equilibrium moisture, Wood Handbook (FPL-GTR-282, 2021), Table 4-2', (
     const temperatureC = ((t - 32) * 5) / 9
     expectWithin(equilibriumMoistureOf({ temperatureC, humidityPercent }), expected, { within: 0.05 })
   })
+
+  // The table alone would not notice a slip in a small constant: eq. (4-5) with the printed constants, written out once more.
+  it.each([-1, 4.5, 15, 21.1, 37.8, 80, 130])(
+    '%f °C: the printed constants, to the last digit',
+    (temperatureC) => {
+      const { W, K, K1, K2 } = data.constantsCelsius
+      const at = (constants: readonly number[]) =>
+        constants.reduce((sum, constant, power) => sum + constant * temperatureC ** power, 0)
+      for (const humidityPercent of [5, 35, 65, 95]) {
+        const a = at(K) * (humidityPercent / 100)
+        const [first, second] = [at(K1) * a, at(K1) * at(K2) * a ** 2]
+        const expected = (1800 / at(W)) * (a / (1 - a) + (first + 2 * second) / (1 + first + second))
+        expectWithin(equilibriumMoistureOf({ temperatureC, humidityPercent }), expected, { within: 1e-10 })
+      }
+    },
+  )
 })
