@@ -1,5 +1,14 @@
-import { boundsOf, distance, intersectionsOf, subSegment } from '@shared/geometry'
-import type { Bounds } from '@shared/geometry'
+import {
+  boundsOf,
+  cross,
+  distance,
+  dot,
+  intersectionsOf,
+  magnitudeOf,
+  minus,
+  subSegment,
+} from '@shared/geometry'
+import type { Bounds, Segment } from '@shared/geometry'
 import type { FacePiece } from './wood-offset'
 
 /** mm. Meetings nearer than this are one, and a piece shorter than this is a point. */
@@ -55,6 +64,7 @@ function jumpFrom(
   let best: (Jump & { readonly length: number }) | undefined
   for (let other = index + 1; other < chain.length; other += 1) {
     if (isApart(box, boxes[other] as Bounds)) continue
+    if (other === index + 1 && isPlainCorner(segment, (chain[other] as FacePiece).segment)) continue
     for (const { tA, tB, point } of intersectionsOf(segment, (chain[other] as FacePiece).segment)) {
       const isJoint = other === index + 1 && tA === 1 && tB === 0
       if (isJoint || tA < t || distance(point, subStart(chain, { index, t })) <= POINT_MM) continue
@@ -67,8 +77,19 @@ function jumpFrom(
   return best
 }
 
+/** Two lines that follow one another meet again only where the second runs back along the first. */
+function isPlainCorner(a: Segment, b: Segment): boolean {
+  if (a.kind !== 'line' || b.kind !== 'line') return false
+  const u = minus(a.end, a.start)
+  const v = minus(b.end, b.start)
+  return dot(u, v) >= 0 || Math.abs(cross(u, v)) > STRAIGHT_BACK * magnitudeOf(u) * magnitudeOf(v)
+}
+
+/** Sine of the angle below which one line runs straight back along another. */
+const STRAIGHT_BACK = 1e-6
+
 /** Parameters of a segment that differ by less are one place. */
-const nearness = (segment: FacePiece['segment']): number =>
+const nearness = (segment: Segment): number =>
   (2 * POINT_MM) / Math.max(distance(segment.start, segment.end), POINT_MM)
 
 function subStart(chain: readonly FacePiece[], { index, t }: Place) {
