@@ -53,3 +53,4 @@ export type {
 } from './measures'
 export type { SectionBlank } from './blank'
 export type { LeastWood } from './least-wood'
+export { faultsOfSection, requireSoundSection } from './faults'
