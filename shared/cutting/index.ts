@@ -1,0 +1,12 @@
+export { compoundMitreOf, mitreAngleOf, tiltedMitreOf, unequalMitreOf } from './mitre'
+export type { CompoundMitre } from './mitre'
+export { coverOf, polygonCoverOf, polygonOpeningOf, rebateOpeningOf } from './rebate-opening'
+export type {
+  Cover,
+  MeasuredOpening,
+  PictureReadings,
+  PolygonReadings,
+  RebateOpening,
+} from './rebate-opening'
+export { footageOf, railsOf, totalRailLengthAt, volumeOf } from './rails'
+export type { Rail, RailSide, Rails, RailsRequest } from './rails'
