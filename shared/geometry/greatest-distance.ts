@@ -1,7 +1,8 @@
 import { Failure } from '@shared/failure'
 import { DIFFERENCE_ACCURACY_MM } from '@shared/units'
 import { bendOf, pointAt } from './evaluate'
-import { nearestOnPath, type NearestOnPath } from './nearest'
+import { nearestOnPath, nearestOnSegment, type NearestOnPath, type NearestOnSegment } from './nearest'
+import { distance, isSamePoint } from './point'
 import type { Path, Point, Segment } from './segment'
 
 /** How far two paths are from being the same: the greatest distance from a point of either to the other, and where. */
@@ -41,6 +42,10 @@ function farthestFrom(path: Path, other: Path, accuracyMm: number): Farthest {
     if (!best || near.distance > best.distance) best = { distance: near.distance, from: at, to: near.point }
   }
   for (const segment of path) {
+    if (other.some((candidate) => isSameSegment(candidate, segment))) {
+      best ??= { distance: 0, from: segment.start, to: segment.start }
+      continue
+    }
     const sample = (t: number): Sample => {
       const at = pointAt(segment, t)
       return { t, at, near: nearestOnPath(other, at) }
@@ -64,17 +69,32 @@ function farthestFrom(path: Path, other: Path, accuracyMm: number): Farthest {
   return best
 }
 
+/** Segments of two issues of a drawing are mostly the very same. */
+function isSameSegment(a: Segment, b: Segment): boolean {
+  if (a === b) return true
+  if (a.kind !== b.kind || !isSamePoint(a.start, b.start) || !isSamePoint(a.end, b.end)) return false
+  return JSON.stringify(a) === JSON.stringify(b)
+}
+
 /**
- * No point between two samples is farther from the other path than this. Always: distance changes no faster than one moves. Where both are
- * nearest to one segment: a point and the point of that segment running beside it (both evenly in their parameters) are never farther apart
- * than the farther pair of ends, but for what each curve leaves its chord: which is of second order, and 0 for lines.
+ * No point between two samples is farther from the other path than this. Always: distance changes no faster than one moves. And against any
+ * one segment of the other path: a point and the point of that segment running beside it (both evenly in their parameters) are never farther
+ * apart than the farther pair of ends, but for what each curve leaves its chord: which is of second order, and 0 for lines.
  */
 function mostBetween(from: Sample, to: Sample, other: Path, bend: number): number {
   const sag = (bend * (to.t - from.t) ** 2) / 8
-  const chord = Math.hypot(to.at.x - from.at.x, to.at.y - from.at.y)
+  const chord = distance(from.at, to.at)
   const byMoving = (from.near.distance + to.near.distance + chord) / 2 + sag
-  if (from.near.segment !== to.near.segment) return byMoving
-  const beside = other[from.near.segment] as Segment
-  const sagBeside = (bendOf(beside) * (to.near.t - from.near.t) ** 2) / 8
-  return Math.min(byMoving, Math.max(from.near.distance, to.near.distance) + sag + sagBeside)
+  const first = other[from.near.segment]
+  const second = other[to.near.segment]
+  if (!first || !second) return byMoving
+  if (first === second) return Math.min(byMoving, sag + mostBeside(first, from.near, to.near))
+  const besideFirst = mostBeside(first, from.near, nearestOnSegment(first, to.at))
+  const besideSecond = mostBeside(second, nearestOnSegment(second, from.at), to.near)
+  return Math.min(byMoving, sag + besideFirst, sag + besideSecond)
+}
+
+function mostBeside(segment: Segment, from: NearestOnSegment, to: NearestOnSegment): number {
+  const sag = (bendOf(segment) * (to.t - from.t) ** 2) / 8
+  return Math.max(from.distance, to.distance) + sag
 }

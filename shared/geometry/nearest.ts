@@ -132,7 +132,7 @@ function cubicStationsOf(cubic: CubicSegment, q: Point): readonly number[] {
 
 /**
  * On an ellipse (P − q)·P′ is a quartic in u = tan(w/2), w the angle from the middle of a stretch; stretches of at most a half turn are taken,
- * so that |u| ≤ 1.
+ * so that |u| ≤ 1, and their joints are looked at as well.
  */
 function ellipseStationsOf(ellipse: EllipseSegment, point: Point): readonly number[] {
   const q = rotated(minus(point, ellipse.centre), -ellipse.rotationRad)
@@ -141,10 +141,11 @@ function ellipseStationsOf(ellipse: EllipseSegment, point: Point): readonly numb
     const half = ellipse.sweepRad / (2 * parts)
     const middle = ellipse.startRad + (2 * part + 1) * half
     const roots = bernsteinRootsOf(ellipseQuartic(ellipse, q, { middle, u: Math.tan(half / 2) }))
-    return roots.map((root) => {
+    const stations = roots.map((root) => {
       const angle = middle + 2 * Math.atan((2 * root - 1) * Math.tan(half / 2))
       return (angle - ellipse.startRad) / ellipse.sweepRad
     })
+    return [part / parts, ...stations]
   }).flat()
 }
 
