@@ -5,6 +5,9 @@ import { existsSync, mkdtempSync, readFileSync, readdirSync, rmSync, statSync } 
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
+import { emptyDatabase } from '../helpers/database'
+import { anyFreePort } from '../helpers/free-port'
+import { listenForLetters } from '../helpers/smtp'
 import { ROOT } from '../helpers/source-files'
 
 interface Started {
@@ -205,6 +208,29 @@ describe('npm start', () => {
     const demoAsked = await refused('empty', { LISTEL_DEMO: 'yes' })
     expect(demoAsked.code).toBe(1)
     expect(demoAsked.said).toContain('was started without the demo')
+  })
+
+  it('uses the database, the mail server, the port and the secret it is given, and starts none of its own', async () => {
+    const database = await emptyDatabase()
+    const letters = await listenForLetters()
+    const port = String(await anyFreePort())
+    const given = {
+      LISTEL_DATABASE_URL: database.url,
+      LISTEL_SMTP_URL: letters.url,
+      LISTEL_PORT: port,
+      LISTEL_SECRET: 'a secret of at least thirty-two characters',
+    }
+    const product = await start('given', given)
+    expect(product.address).toBe(`http://127.0.0.1:${port}`)
+    expect(await readyOf(product.address)).toBe(200)
+    expect(childrenOf('given').map(({ name }) => name)).toEqual(['application'])
+    expect(existsSync(join(folder, 'given', 'mariadb'))).toBe(false)
+    const taken = await refused('other', given)
+    expect(taken.code).toBe(1)
+    expect(taken.said).toContain(`Port ${port} at 127.0.0.1 is taken`)
+    expect(await stop(product, 'SIGTERM')).toBe(0)
+    await letters.stop()
+    await database.drop()
   })
 
   it('stops whatever it had begun when it is told to while starting', async () => {
