@@ -105,7 +105,7 @@ const setField = z.discriminatedUnion('field', [
 
 /** One step of drawing. */
 export const SectionEditSchema: z.ZodType<SectionEdit> = z.lazy(() =>
-  z.union([
+  z.discriminatedUnion('act', [
     setField,
     z.strictObject({ act: z.literal('put-in'), at: z.int().min(0), member: DraftMemberSchema }),
     z.strictObject({ act: z.literal('take-out'), key }),

@@ -1,9 +1,9 @@
 import type { Actor } from '@shared/access'
-import { DraftSectionSchema, requireValid } from '@shared/contracts'
+import { DraftSectionSchema, invalid, requireValid } from '@shared/contracts'
 import type { DraftEditsRequest, DraftStepInput, OutputOf } from '@shared/contracts'
 import { Failure } from '@shared/failure'
 import { applyEdit } from '@shared/section'
-import type { DraftSection } from '@shared/section'
+import type { DraftSection, SectionEdit } from '@shared/section'
 import { Draft, DraftEdit } from '../models/draft'
 import { now } from './clock'
 import { onceOnly } from './operation'
@@ -205,13 +205,12 @@ async function redoStep(tx: Tx, { draft, path }: StepPlace, document: DraftSecti
 const nothingTo = (act: 'undo' | 'redo'): Failure =>
   new Failure('not-ready', { says: `There is no step to ${act}.` })
 
-/** Applies an edit; a fault in it is told with its place in the request. */
-function edited(document: DraftSection, edit: Parameters<typeof applyEdit>[1], path: string) {
+/** Applies an edit; what is wrong with it is told with its place in the request. */
+function edited(document: DraftSection, edit: SectionEdit, path: string) {
   try {
     return applyEdit(document, edit)
   } catch (error) {
-    if (!(error instanceof Failure)) throw error
-    const faults = error.details.faults?.map((fault) => ({ ...fault, path: path + fault.path })) ?? []
-    throw new Failure(error.code, { ...error.details, faults }, { cause: error })
+    if (!(error instanceof Failure) || error.code !== 'input-invalid') throw error
+    throw invalid([{ path, code: 'edit-refused', says: error.message }])
   }
 }
