@@ -1,4 +1,4 @@
-import { CommissionAnswer, CommissionLine, ImportAnswer, TrailLine } from '@shared/contracts'
+import { CommissionAnswer, CommissionsAnswer, ImportAnswer, TrailAnswer } from '@shared/contracts'
 import type {
   CommissionChangeRequest,
   CommissionListQuery,
@@ -11,7 +11,7 @@ import { addressOf, ask, send } from './request'
 export type CommissionQuery = Partial<OutputOf<typeof CommissionListQuery>>
 
 export const readCommissions = (query: CommissionQuery, signal?: AbortSignal) =>
-  ask(CommissionLine.array(), ['commissions'], { query, signal })
+  ask(CommissionsAnswer, ['commissions'], { query, signal })
 export const readCommission = (id: string, signal?: AbortSignal) =>
   ask(CommissionAnswer, ['commissions', id], { signal })
 export const addCommission = (body: OutputOf<typeof CommissionRequest>) =>
@@ -22,5 +22,5 @@ export const changeCommission = (id: string, body: OutputOf<typeof CommissionCha
 export const importCommission = (body: OutputOf<typeof ImportRequest>) =>
   send(ImportAnswer, 'POST', ['commissions', 'import'], { body })
 export const readTrail = (id: string, signal?: AbortSignal) =>
-  ask(TrailLine.array(), ['commissions', id, 'trail'], { signal })
+  ask(TrailAnswer, ['commissions', id, 'trail'], { signal })
 export const commissionFileAddress = (id: string) => addressOf(['commissions', id, 'file'])

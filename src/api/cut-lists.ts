@@ -4,9 +4,6 @@ import { addressOf, ask, send } from './request'
 
 export const readRails = (commissionId: string, signal?: AbortSignal) =>
   ask(RailsAnswer, ['commissions', commissionId, 'rails'], { signal })
-/** The cut lists made for one commission, the latest first. */
-export const readCutListsOf = (commissionId: string, signal?: AbortSignal) =>
-  ask(CutListLine.array(), ['commissions', commissionId, 'plans'], { signal })
 export const makeCutList = (commissionId: string, body: OutputOf<typeof PlanRequest>) =>
   send(CutListAnswer, 'POST', ['commissions', commissionId, 'plans'], { body })
 export const readCutLists = (signal?: AbortSignal) => ask(CutListLine.array(), ['cut-lists'], { signal })

@@ -1,7 +1,7 @@
 import {
   DifferenceAnswer,
   IssueAnswer,
-  IssueLine,
+  IssuesAnswer,
   LetterPreview,
   OrderAnswer,
   RemarkAnswer,
@@ -19,7 +19,7 @@ import { addressOf, ask, send } from './request'
 export type SheetForm = 'pdf' | 'dxf' | 'svg'
 
 export const readIssues = (commissionId: string, signal?: AbortSignal) =>
-  ask(IssueLine.array(), ['commissions', commissionId, 'issues'], { signal })
+  ask(IssuesAnswer, ['commissions', commissionId, 'issues'], { signal })
 export const putForward = (commissionId: string, body: OutputOf<typeof PutForwardRequest>) =>
   send(IssueAnswer, 'POST', ['commissions', commissionId, 'issues'], { body })
 export const readIssue = (id: string, signal?: AbortSignal) => ask(IssueAnswer, ['issues', id], { signal })

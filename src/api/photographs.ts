@@ -1,4 +1,4 @@
-import { PhotographAnswer, ReadingAnswer } from '@shared/contracts'
+import { PhotographAnswer } from '@shared/contracts'
 import type { OutputOf, PhotographChangeRequest, PhotographRequest, ReadingRequest } from '@shared/contracts'
 import { addressOf, send } from './request'
 
@@ -11,8 +11,9 @@ export function addPhotograph(commissionId: string, file: File, about: OutputOf<
 }
 export const changePhotograph = (id: string, body: OutputOf<typeof PhotographChangeRequest>) =>
   send(PhotographAnswer, 'PATCH', ['photographs', id], { body })
+/** Gives the photograph with its new reading. */
 export const addReading = (photographId: string, body: OutputOf<typeof ReadingRequest>) =>
-  send(ReadingAnswer, 'POST', ['photographs', photographId, 'readings'], { body })
+  send(PhotographAnswer, 'POST', ['photographs', photographId, 'readings'], { body })
 export const photographAddress = (id: string, size: 'screen' | 'thumb') =>
   addressOf(['photographs', id, 'image'], { size })
 export const originalAddress = (id: string) => addressOf(['photographs', id, 'original'])

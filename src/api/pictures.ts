@@ -1,4 +1,4 @@
-import { MeasurementAnswer, PictureAnswer } from '@shared/contracts'
+import { MeasurementsAnswer, PictureAnswer } from '@shared/contracts'
 import type { MeasurementRequest, OutputOf, PictureChangeRequest, PictureRequest } from '@shared/contracts'
 import { ask, send } from './request'
 
@@ -7,6 +7,7 @@ export const addPicture = (commissionId: string, body: OutputOf<typeof PictureRe
 export const changePicture = (id: string, body: OutputOf<typeof PictureChangeRequest>) =>
   send(PictureAnswer, 'PATCH', ['pictures', id], { body })
 export const readMeasurements = (pictureId: string, signal?: AbortSignal) =>
-  ask(MeasurementAnswer.array(), ['pictures', pictureId, 'measurements'], { signal })
+  ask(MeasurementsAnswer, ['pictures', pictureId, 'measurements'], { signal })
+/** Gives the picture with its new measurement. */
 export const addMeasurement = (pictureId: string, body: OutputOf<typeof MeasurementRequest>) =>
-  send(MeasurementAnswer, 'POST', ['pictures', pictureId, 'measurements'], { body })
+  send(PictureAnswer, 'POST', ['pictures', pictureId, 'measurements'], { body })

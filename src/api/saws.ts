@@ -1,8 +1,8 @@
-import { SawCardAnswer } from '@shared/contracts'
+import { SawsAnswer } from '@shared/contracts'
 import type { OutputOf, SawCardRequest } from '@shared/contracts'
 import { ask, send } from './request'
 
 /** The saws with the latest card of each. */
-export const readSaws = (signal?: AbortSignal) => ask(SawCardAnswer.array(), ['saws'], { signal })
+export const readSaws = (signal?: AbortSignal) => ask(SawsAnswer, ['saws'], { signal })
 export const addSawCard = (body: OutputOf<typeof SawCardRequest>) =>
-  send(SawCardAnswer, 'POST', ['saws', 'cards'], { body })
+  send(SawsAnswer, 'POST', ['saws', 'cards'], { body })

@@ -1,5 +1,5 @@
-import { WaitingLine } from '@shared/contracts'
+import { WaitingAnswer } from '@shared/contracts'
 import { ask } from './request'
 
 /** What waits for the person asking. */
-export const readWaiting = (signal?: AbortSignal) => ask(WaitingLine.array(), ['waiting'], { signal })
+export const readWaiting = (signal?: AbortSignal) => ask(WaitingAnswer, ['waiting'], { signal })

@@ -12,6 +12,7 @@ import type { CommissionQuery } from '@/api/commissions'
 import { KEYS, keysTouchedBy } from './query-keys'
 import { useAct } from './use-act'
 import { useAsked } from './use-asked'
+import type { AskedOptions } from './use-asked'
 
 export { commissionFileAddress } from '@/api/commissions'
 export type { CommissionQuery } from '@/api/commissions'
@@ -22,10 +23,11 @@ type Without<Fn extends (...given: never[]) => unknown, At extends number> = Omi
   'operationId'
 >
 
-export const useCommissions = (query: MaybeRefOrGetter<CommissionQuery>) =>
+export const useCommissions = (query: MaybeRefOrGetter<CommissionQuery>, options: AskedOptions = {}) =>
   useAsked(
     () => [...KEYS.commissions, toValue(query)],
     (signal) => readCommissions(toValue(query), signal),
+    options,
   )
 export const useCommission = (id: IdSource) =>
   useAsked(

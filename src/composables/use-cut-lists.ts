@@ -1,17 +1,17 @@
-import { toValue } from 'vue'
+import { computed, toValue } from 'vue'
 import type { MaybeRefOrGetter } from 'vue'
 import {
   makeCutList,
   openCutList,
   readCutList,
   readCutLists,
-  readCutListsOf,
   readRails,
   recordCutFact,
 } from '@/api/cut-lists'
 import { KEYS, keysTouchedBy } from './query-keys'
 import { useAct } from './use-act'
 import { useAsked } from './use-asked'
+import type { AskedOptions } from './use-asked'
 
 export { cutListPrintAddress } from '@/api/cut-lists'
 
@@ -22,12 +22,17 @@ export const useRails = (commissionId: IdSource) =>
     () => KEYS.rails(toValue(commissionId)),
     (signal) => readRails(toValue(commissionId), signal),
   )
-export const useCutListsOf = (commissionId: IdSource) =>
-  useAsked(
-    () => KEYS.cutListsOf(toValue(commissionId)),
-    (signal) => readCutListsOf(toValue(commissionId), signal),
+/** The cut lists made for one commission, the latest first. */
+export function useCutListsOf(commissionId: IdSource) {
+  const { value, ...asked } = useAsked(KEYS.cutLists, readCutLists)
+  const ofCommission = computed(() =>
+    value.value
+      ?.filter(({ commission }) => commission.id === toValue(commissionId))
+      .sort((a, b) => b.no - a.no),
   )
-export const useCutLists = () => useAsked(KEYS.cutLists, readCutLists)
+  return { value: ofCommission, ...asked }
+}
+export const useCutLists = (options: AskedOptions = {}) => useAsked(KEYS.cutLists, readCutLists, options)
 export const useCutList = (id: MaybeRefOrGetter<string | null>) =>
   useAsked(
     () => KEYS.cutList(toValue(id) ?? ''),

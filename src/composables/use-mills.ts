@@ -1,7 +1,7 @@
 import { toValue } from 'vue'
 import type { MaybeRefOrGetter } from 'vue'
 import type { MillCard, SawCard } from '@shared/contracts'
-import { addMill, addMillCard, changeMill, readMill, readMills } from '@/api/mills'
+import { addMill, addMillCard, changeMill, readMill, readMillCards, readMills } from '@/api/mills'
 import type { ArchiveState } from '@/api/people'
 import { addSawCard, readSaws } from '@/api/saws'
 import { KEYS } from './query-keys'
@@ -19,6 +19,12 @@ export const useMill = (id: IdSource) =>
   useAsked(
     () => KEYS.mill(toValue(id)),
     (signal) => readMill(toValue(id), signal),
+  )
+/** All cards of a mill, each a numbered version. */
+export const useMillCards = (id: IdSource) =>
+  useAsked(
+    () => KEYS.millCards(toValue(id)),
+    (signal) => readMillCards(toValue(id), signal),
   )
 export const useAddMill = () =>
   useAct((input: Parameters<typeof addMill>[0]) => addMill(input), { changes: () => [KEYS.mills] })

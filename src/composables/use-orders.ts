@@ -4,6 +4,7 @@ import { readOrder, readOrders, readOrdersOf, recordOrderEvent } from '@/api/ord
 import { KEYS, keysTouchedBy } from './query-keys'
 import { useAct } from './use-act'
 import { useAsked } from './use-asked'
+import type { AskedOptions } from './use-asked'
 
 export { orderSheetAddress } from '@/api/orders'
 
@@ -12,7 +13,7 @@ type IdSource = MaybeRefOrGetter<string>
 /** A letter goes out by itself: an order is looked at again while it is open on the screen. */
 const LOOK_AGAIN_MS = 5_000
 
-export const useOrders = () => useAsked(KEYS.orders, readOrders)
+export const useOrders = (options: AskedOptions = {}) => useAsked(KEYS.orders, readOrders, options)
 export const useOrdersOf = (commissionId: IdSource) =>
   useAsked(
     () => KEYS.ordersOf(toValue(commissionId)),

@@ -58,14 +58,14 @@ const WORKSHOP_ROUTES: RouteRecordRaw[] = [
   {
     path: 'orders/:id',
     name: 'order',
-    component: () => import('@/pages/OrderPage.vue'),
+    component: () => import('@/pages/orders/OrderPage.vue'),
     props: true,
     meta: { title: 'Knife order', right: 'order.list' },
   },
   {
     path: 'cut-lists',
     name: 'cut-lists',
-    component: () => import('@/pages/CutListsPage.vue'),
+    component: () => import('@/pages/cut-lists/CutListsPage.vue'),
     meta: { title: 'Bench', right: 'cut-list.list' },
   },
   {
@@ -136,7 +136,7 @@ export const ROUTES: RouteRecordRaw[] = [
       {
         path: '',
         name: 'cut-list',
-        component: () => import('@/pages/CutListPage.vue'),
+        component: () => import('@/pages/cut-lists/CutListPage.vue'),
         props: true,
         meta: { title: 'Bench', right: 'cut-list.read' },
       },
