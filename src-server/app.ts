@@ -19,7 +19,11 @@ export function buildApp(config: Config): Express {
   const isHttps = config.publicUrl.startsWith('https:')
   const log = logOf(config.logLevel)
   openFileStore(config.dataDir)
-  setInstallation({ publicUrl: config.publicUrl, caughtMailDir: config.caughtMailDir })
+  setInstallation({
+    publicUrl: config.publicUrl,
+    caughtMailDir: config.caughtMailDir,
+    mailFrom: config.mailFrom,
+  })
 
   const app = express()
   app.disable('x-powered-by')

@@ -28,7 +28,8 @@ class Refusal extends Error {
   }
 }
 
-const lineOf = (file: string, fault: Fault) => `${file}: ${fault.path === '' ? '/' : fault.path} ${fault.says}`
+const lineOf = (file: string, fault: Fault) =>
+  `${file}: ${fault.path === '' ? '/' : fault.path} ${fault.says}`
 
 interface Request {
   readonly files: readonly string[]
@@ -76,7 +77,9 @@ async function commissionFrom(path: string): Promise<CommissionFile> {
 }
 
 /** All or nothing: every file is answered before anything is said. */
-async function answersTo(files: readonly string[]): Promise<{ commission: CommissionFile; answer: object }[]> {
+async function answersTo(
+  files: readonly string[],
+): Promise<{ commission: CommissionFile; answer: object }[]> {
   const answers: { commission: CommissionFile; answer: object }[] = []
   const lines: string[] = []
   for (const path of files) {
@@ -119,7 +122,11 @@ async function writeWhole(files: ReadonlyMap<string, Uint8Array | string>): Prom
 async function run(args: readonly string[]): Promise<string> {
   const request = requestFrom(args)
   if (request.schema !== undefined) {
-    return JSON.stringify(request.schema === 'in' ? commissionFileJsonSchema() : commissionAnswerJsonSchema(), null, 2)
+    return JSON.stringify(
+      request.schema === 'in' ? commissionFileJsonSchema() : commissionAnswerJsonSchema(),
+      null,
+      2,
+    )
   }
   const answers = await answersTo(request.files)
   const [first] = answers

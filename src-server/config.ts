@@ -29,6 +29,7 @@ const StoreEnvironment = Environment.pick({
   LISTEL_HOST: true,
   LISTEL_PORT: true,
   LISTEL_PUBLIC_URL: true,
+  LISTEL_MAIL_FROM: true,
 })
 
 /** Everything the server is told from outside, read once. */
@@ -40,7 +41,6 @@ export interface Config extends StoreConfig {
   /** The built client; undefined: this server answers only /api. */
   readonly clientDir: string | undefined
   readonly caughtMailDir: string | undefined
-  readonly mailFrom: string
   readonly logLevel: 'silent' | 'error' | 'warn' | 'info' | 'debug'
 }
 
@@ -51,6 +51,8 @@ export interface StoreConfig {
   readonly dataDir: string
   /** Address that people and letters use, without a slash at its end. */
   readonly publicUrl: string
+  /** The address that letters come from. */
+  readonly mailFrom: string
 }
 
 /** The start stops on this; it names every fault at once. */
@@ -70,7 +72,6 @@ export function readConfig(env: Env): Config {
     secret: read.LISTEL_SECRET,
     clientDir: read.LISTEL_CLIENT_DIR,
     caughtMailDir: read.LISTEL_CAUGHT_MAIL_DIR,
-    mailFrom: read.LISTEL_MAIL_FROM,
     logLevel: read.LISTEL_LOG_LEVEL,
   }
 }
@@ -87,6 +88,7 @@ function storeOf(read: z.output<typeof StoreEnvironment>): StoreConfig {
     databaseUrl: read.LISTEL_DATABASE_URL,
     dataDir: read.LISTEL_DATA,
     publicUrl: publicUrl.replace(/\/+$/, ''),
+    mailFrom: read.LISTEL_MAIL_FROM,
   }
 }
 

@@ -6,7 +6,7 @@ import type { Config } from './config'
 import { logOf } from './middleware/request-log'
 import { closeDatabase, openDatabase } from './models/database'
 import { WORKERS } from './workers'
-import type { RunningWorker } from './workers'
+import type { RunningWorker } from './services/running-worker'
 
 /** Requests under way have this long to end once a stop is asked for. */
 const GRACE_MS = 10_000

@@ -1,14 +1,5 @@
-/** Work that goes on beside the answering of requests, in this process, until it is stopped. */
-export interface RunningWorker {
-  stop(): Promise<void>
-}
-
-export type StartWorker = (surroundings: WorkerSurroundings) => RunningWorker
-
-export interface WorkerSurroundings {
-  readonly smtpUrl: string
-  readonly log: (error: unknown, says: string) => void
-}
+import { startMailWorker } from './mail/worker'
+import type { StartWorker } from './services/running-worker'
 
 /** Every worker that the server starts. */
-export const WORKERS: readonly StartWorker[] = []
+export const WORKERS: readonly StartWorker[] = [startMailWorker]

@@ -51,6 +51,10 @@ export {
   WaitingAnswer,
   IssuesAnswer,
   SheetParams,
+  OrdersAnswer,
+  LettersAnswer,
+  AttachmentParams,
+  TokenParams,
 } from './params'
 export {
   SignInRequest,

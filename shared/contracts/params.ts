@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { CommissionLine, MeasurementAnswer, Stage, TrailLine, WaitingLine } from './commissions'
 import { ClientAnswer, MillAnswer, MillCardAnswer, PersonAnswer, SawCardAnswer } from './people'
+import { LetterBrief, OrderLine } from './orders'
 import { IssueLine } from './review'
 import { Id } from './scalars'
 
@@ -44,3 +45,7 @@ export const WaitingAnswer = z.array(WaitingLine)
 export const IssuesAnswer = z.array(IssueLine)
 /** A sheet is asked for by its thing and its form. */
 export const SheetParams = z.strictObject({ id: Id, format: z.enum(['pdf', 'dxf', 'svg']) })
+export const OrdersAnswer = z.array(OrderLine)
+export const LettersAnswer = z.array(LetterBrief)
+export const AttachmentParams = z.strictObject({ id: Id, index: z.coerce.number().int().min(0).max(100) })
+export const TokenParams = z.strictObject({ token: z.string().min(20).max(200) })

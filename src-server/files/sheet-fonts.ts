@@ -4,7 +4,7 @@ import { createRequire } from 'node:module'
 /** Work Sans as base64 TrueType, embedded in every PDF. */
 export interface SheetFontFiles {
   readonly regular: string
-  readonly semiBold: string
+  readonly semibold: string
 }
 
 const require = createRequire(import.meta.url)
@@ -18,6 +18,6 @@ export function readSheetFonts(): Promise<SheetFontFiles> {
   fonts ??= Promise.all([
     read('400Regular/WorkSans_400Regular.ttf'),
     read('600SemiBold/WorkSans_600SemiBold.ttf'),
-  ]).then(([regular, semiBold]) => ({ regular, semiBold }))
+  ]).then(([regular, semibold]) => ({ regular, semibold }))
   return fonts
 }

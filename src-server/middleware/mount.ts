@@ -5,7 +5,7 @@ import type { RawCall, Route } from '../routes/route'
 import { notFound, rightMissing } from '../services/rights'
 import type { authenticator } from './authenticate'
 import { dropUpload, readJson, readUpload } from './body'
-import { isFileAnswer, sendFileAnswer } from './file-answer'
+import { isFileAnswer, sendFileAnswer } from '../files/file-answer'
 import { sessionCookieOf } from './session-token'
 import type { TokenSettings } from './session-token'
 

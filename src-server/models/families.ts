@@ -3,8 +3,11 @@ import { bindCommissions } from './commission'
 import { bindDrafts } from './draft'
 import { bindFiles } from './file'
 import { bindOperations } from './operation'
+import { bindLetters } from './letter'
+import { bindOrders } from './order'
 import { bindPeople } from './person'
 import { bindPhotographs } from './photograph'
+import { bindRack } from './rack'
 import { bindReview } from './review'
 import { bindSessions } from './session'
 import { bindTrail } from './trail'
@@ -20,6 +23,9 @@ export const MODEL_FAMILIES: readonly ((sequelize: Sequelize) => void)[] = [
   bindPhotographs,
   bindDrafts,
   bindReview,
+  bindOrders,
+  bindLetters,
+  bindRack,
   bindTrail,
   bindOperations,
 ]

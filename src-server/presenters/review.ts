@@ -1,5 +1,5 @@
 import type { DecisionView, DifferenceView, IssueLineView, IssueView, RemarkView } from '@shared/contracts'
-import type { Section, SectionDifference } from '@shared/section'
+import type { differenceOf, Section } from '@shared/section'
 import type { Commission } from '../models/commission'
 import type { Decision, Issue, Remark, RemarkEntry } from '../models/review'
 
@@ -82,7 +82,7 @@ export const presentRemark = ({ remark, entries }: RemarkWithEntries): RemarkVie
 export function presentDifference(found: {
   readonly from: Issue | null
   readonly fromSection: Section | null
-  readonly difference: SectionDifference | null
+  readonly difference: ReturnType<typeof differenceOf> | null
 }): DifferenceView {
   const { from, fromSection, difference } = found
   return {

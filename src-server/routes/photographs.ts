@@ -7,7 +7,7 @@ import {
   ReadingRequest,
 } from '@shared/contracts'
 import { MOST_IMAGE_BYTES } from '../middleware/body'
-import { fileAnswer } from '../middleware/file-answer'
+import { fileAnswer } from '../files/file-answer'
 import { presentPhotograph } from '../presenters/commissions'
 import { addPhotograph } from '../services/add-photograph'
 import { imageOf, originalOf } from '../services/photograph-files'

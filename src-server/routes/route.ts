@@ -2,7 +2,7 @@ import type { Actor, Right } from '@shared/access'
 import { Nothing, requireValid } from '@shared/contracts'
 import type { Contract, OutputOf } from '@shared/contracts'
 import type { Upload, UploadLimits } from '../middleware/body'
-import type { FileAnswer } from '../middleware/file-answer'
+import type { FileAnswer } from '../files/file-answer'
 import type { SessionCookie } from '../middleware/session-token'
 
 export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete'

@@ -1,6 +1,6 @@
 import { WaitingAnswer } from '@shared/contracts'
 import { presentWaiting } from '../presenters/waiting'
-import { whatWaits } from '../services/waiting'
+import { whatWaits } from '../services/what-waits'
 import { route } from './route'
 
 const waitingRoute = route({

@@ -3,6 +3,8 @@ import type { CommissionFacts } from '@shared/course'
 import { Measurement, Picture } from '../models/commission'
 import { Draft } from '../models/draft'
 import { Photograph } from '../models/photograph'
+import { ordersKnown } from './orders-known'
+import { issuesKnown } from './review-known'
 
 /** What one source knows of a commission. */
 export interface KnownOfCommission {
@@ -20,7 +22,13 @@ export interface KnownOfCommission {
 export type FactSource = (commissionIds: readonly string[]) => Promise<ReadonlyMap<string, KnownOfCommission>>
 
 /** Everything that a commission's standing is read from. */
-export const FACT_SOURCES: readonly FactSource[] = [picturesKnown, photographsKnown, draftsKnown]
+export const FACT_SOURCES: readonly FactSource[] = [
+  picturesKnown,
+  photographsKnown,
+  draftsKnown,
+  issuesKnown,
+  ordersKnown,
+]
 
 /** All facts of a commission, with what the list says besides. */
 export interface CommissionState {

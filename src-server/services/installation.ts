@@ -3,6 +3,8 @@ export interface Installation {
   /** Address that letters and links use, without a slash at its end. */
   readonly publicUrl: string
   readonly caughtMailDir: string | undefined
+  /** The address that letters come from. */
+  readonly mailFrom: string
 }
 
 let held: Installation | undefined

@@ -17,17 +17,6 @@ export interface WaitingItem extends Omit<WaitingLineView, 'since' | 'commission
 /** Says what waits for the actor in one part of the work; nothing for a role that it does not concern. */
 export type WaitingSource = (actor: Actor) => Promise<readonly WaitingItem[]>
 
-/** Every part of the work that something can wait in. */
-export const WAITING_SOURCES: readonly WaitingSource[] = [drawingWaits, overdueWaits]
-
-/** Everything that waits for the actor: the urgent first, then what has waited longest. */
-export async function whatWaits(actor: Actor): Promise<WaitingItem[]> {
-  const found = await Promise.all(WAITING_SOURCES.map((source) => source(actor)))
-  return found
-    .flat()
-    .sort((a, b) => Number(b.urgent) - Number(a.urgent) || a.since.getTime() - b.since.getTime())
-}
-
 export const hasRole = (actor: Actor, role: RoleOfPerson): boolean =>
   actor.memberships.some((membership) => membership.role === role)
 
@@ -41,7 +30,7 @@ async function openCommissions(actor: Actor): Promise<StandingCommission[]> {
 }
 
 /** Designers: pictures to be measured, evidence to be found, sections to be drawn. */
-async function drawingWaits(actor: Actor): Promise<readonly WaitingItem[]> {
+export async function drawingWaits(actor: Actor): Promise<readonly WaitingItem[]> {
   if (!hasRole(actor, 'designer')) return []
   const waiting = (await openCommissions(actor)).filter(({ standing }) =>
     ['picture', 'evidence', 'section'].includes(standing.stage),
@@ -58,7 +47,7 @@ async function drawingWaits(actor: Actor): Promise<readonly WaitingItem[]> {
 }
 
 /** Managers: what is past its day, wherever it stands. */
-async function overdueWaits(actor: Actor): Promise<readonly WaitingItem[]> {
+export async function overdueWaits(actor: Actor): Promise<readonly WaitingItem[]> {
   if (!hasRole(actor, 'manager')) return []
   const day = today()
   return (await openCommissions(actor)).flatMap(({ commission, standing }) => {

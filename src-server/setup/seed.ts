@@ -7,10 +7,10 @@ import { runProgram } from './program'
 
 /** Fills the demo workshop into an empty database and notes its sign-ins in the data folder. */
 runProgram(async () => {
-  const { databaseUrl, dataDir, publicUrl } = readStoreConfig(process.env)
+  const { databaseUrl, dataDir, publicUrl, mailFrom } = readStoreConfig(process.env)
   await openDatabase(databaseUrl)
   openFileStore(dataDir)
-  setInstallation({ publicUrl, caughtMailDir: undefined })
+  setInstallation({ publicUrl, caughtMailDir: undefined, mailFrom })
   try {
     await fillDemo({ dataDir })
   } finally {

@@ -69,13 +69,19 @@ const ROWS: readonly Row[] = [
 
   {
     of: /^src-server\/routes\//,
-    may: [server('middleware', 'services', 'presenters'), shared('contracts', 'access', 'failure')],
+    may: [
+      server('middleware', 'services', 'presenters', 'files/file-answer'),
+      shared('contracts', 'access', 'failure'),
+    ],
     packages: ['express', 'multer'],
     node: true,
   },
   {
     of: /^src-server\/services\//,
-    may: [server('models', 'mail/outbox', 'mail/letters[a-z-]*', 'files', 'migrations/migrator'), anyShared],
+    may: [
+      server('models', 'mail/(outbox|reading)', 'mail/letters[a-z-]*', 'files', 'migrations/migrator'),
+      anyShared,
+    ],
     packages: ['sequelize', 'argon2', 'sharp', 'uuid', 'jsonwebtoken'],
     node: true,
   },

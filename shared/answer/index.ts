@@ -1,0 +1,2 @@
+export { headRunningOf, knifeHeadOf } from './head'
+export type { WrittenHead } from './head'

@@ -1,0 +1,37 @@
+import { INSTANT, KEY, WORD, tables } from './migration'
+
+export const letters = tables('20261201-1070-letters', {
+  letter: `
+    id ${KEY} NOT NULL PRIMARY KEY,
+    message_id VARCHAR(200) NOT NULL,
+    kind ${WORD} NOT NULL,
+    about_type ${WORD} NOT NULL,
+    about_id ${KEY} NOT NULL,
+    commission_id ${KEY} NOT NULL,
+    to_address VARCHAR(254) NOT NULL,
+    subject VARCHAR(300) NOT NULL,
+    text MEDIUMTEXT NOT NULL,
+    html MEDIUMTEXT NOT NULL,
+    raw_file_id ${KEY} NOT NULL,
+    state ${WORD} NOT NULL,
+    due_at ${INSTANT} NOT NULL,
+    claimed_by ${KEY} NULL,
+    claimed_until ${INSTANT} NULL,
+    tries INT NOT NULL DEFAULT 0,
+    queued_at ${INSTANT} NOT NULL,
+    sent_at ${INSTANT} NULL,
+    UNIQUE KEY letter_message (message_id),
+    KEY letter_due (state, due_at),
+    KEY letter_about (about_id),
+    CONSTRAINT letter_of_commission FOREIGN KEY (commission_id) REFERENCES commission (id),
+    CONSTRAINT letter_is_file FOREIGN KEY (raw_file_id) REFERENCES file (id),
+    CONSTRAINT letter_state_known CHECK (state IN ('queued', 'sending', 'sent', 'failed'))`,
+  letter_try: `
+    id ${KEY} NOT NULL PRIMARY KEY,
+    letter_id ${KEY} NOT NULL,
+    no INT NOT NULL,
+    at ${INSTANT} NOT NULL,
+    outcome VARCHAR(1000) NOT NULL,
+    UNIQUE KEY letter_try_no (letter_id, no),
+    CONSTRAINT letter_try_of_letter FOREIGN KEY (letter_id) REFERENCES letter (id)`,
+})
