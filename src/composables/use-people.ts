@@ -6,6 +6,7 @@ import type { ArchiveState } from '@/api/people'
 import { KEYS } from './query-keys'
 import { useAct } from './use-act'
 import { useAsked } from './use-asked'
+import type { AskedOptions } from './use-asked'
 
 export type { ArchiveState } from '@/api/people'
 
@@ -25,10 +26,11 @@ export const useChangePerson = () =>
     { changes: () => [KEYS.people] },
   )
 
-export const useClients = (state: StateSource = 'active') =>
+export const useClients = (state: StateSource = 'active', options: AskedOptions = {}) =>
   useAsked(
     () => [...KEYS.clients, toValue(state)],
     (signal) => readClients(toValue(state), signal),
+    options,
   )
 export const useAddClient = () =>
   useAct((input: Parameters<typeof addClient>[0]) => addClient(input), { changes: () => [KEYS.clients] })

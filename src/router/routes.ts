@@ -52,7 +52,7 @@ const WORKSHOP_ROUTES: RouteRecordRaw[] = [
   {
     path: 'orders',
     name: 'orders',
-    component: () => import('@/pages/OrdersPage.vue'),
+    component: () => import('@/pages/orders/OrdersPage.vue'),
     meta: { title: 'Knife orders', right: 'order.list' },
   },
   {
