@@ -58,6 +58,7 @@ export function selfCrossingsOf(path: Path): readonly PathMeeting[] {
       const other = pieces[byX[next] ?? 0]
       if (!other || other.box.min.x > piece.box.max.x + BOX_REACH_MM) break
       if (isApart(piece.box, other.box)) continue
+      if (onlyMeetAtJoint(piece, other)) continue
       const [first, second] = comesBefore(piece, other) ? [piece, other] : [other, piece]
       crossings.push(...crossingsOf(first, second))
     }
@@ -66,6 +67,20 @@ export function selfCrossingsOf(path: Path): readonly PathMeeting[] {
     (m, n) => m.segmentA + m.tA - n.segmentA - n.tA || m.segmentB + m.tB - n.segmentB - n.tB,
   )
 }
+
+/** mm; less than this across is upright as far as boxes can tell. */
+const NARROW_MM = 1e-6
+
+/** Neighbours that both run on in x, to either side of their joint, share nothing else: most neighbours of a face. */
+function onlyMeetAtJoint(a: Piece, b: Piece): boolean {
+  const common = Math.min(a.box.max.x, b.box.max.x) - Math.max(a.box.min.x, b.box.min.x)
+  if (common > 0) return false
+  const isJoined = isSamePoint(a.curve.end, b.curve.start) || isSamePoint(b.curve.end, a.curve.start)
+  return isJoined && runsOnInX(a.curve) && runsOnInX(b.curve)
+}
+
+const runsOnInX = (curve: Segment): boolean =>
+  Math.abs(curve.end.x - curve.start.x) > NARROW_MM && extremaOf(curve, 'x').length === 0
 
 const leftOfPiece = (pieces: readonly Piece[], i: number): number => pieces[i]?.box.min.x ?? 0
 

@@ -3,9 +3,9 @@ import { sweepOf } from './arc'
 import { pointAt } from './evaluate'
 import { flattened } from './flatten'
 import { convexHullOf } from './hull'
-import { wrappedTurn } from './point'
+import { cross, magnitudeOf, minus, wrappedTurn } from './point'
 import { quadraticRootsOf } from './roots'
-import type { ArcSegment, CubicSegment, EllipseSegment, Path, Segment } from './segment'
+import type { ArcSegment, CubicSegment, EllipseSegment, Path, Point, Segment } from './segment'
 
 /** How far a path reaches along a direction, mm from the origin. */
 export interface Extent {
@@ -107,8 +107,6 @@ const areaOf = ({ widthMm, heightMm }: EnclosingRectangle): number => widthMm * 
 
 /** Coarse chords only find the neighbourhood of each least rectangle; the true curves decide within it. */
 const SCOUT_CHORD_MM = 0.02
-/** Places whose scouted area is within this part of the best are looked into: more than the chords can be wrong by on any section. */
-const SCOUT_MARGIN = 0.01
 /** Of rectangles alike to this part, the one least tilted is taken. */
 const ALIKE = 1e-12
 
@@ -120,12 +118,13 @@ export function smallestEnclosingRectangleOf(path: Path): EnclosingRectangle {
   const hull = convexHullOf(flattened(path, SCOUT_CHORD_MM))
   if (hull.length < 2)
     throw new Failure('input-invalid', { says: 'a path of no extent has no enclosing rectangle' })
+  const outer = path.filter((segment) => reachesHull(segment, hull))
   const angles = sideAnglesOf(hull)
-  const scouted = angles.map((angle) => areaOf(enclosingRectangleAt(path, angle)))
-  const least = Math.min(...scouted)
+  const scouted = angles.map((angle) => enclosingRectangleAt(outer, angle))
+  const least = Math.min(...scouted.map(areaOf))
   const upright = enclosingRectangleAt(path, 0)
   return angles
-    .filter((_, i) => (scouted[i] ?? Infinity) <= least * (1 + SCOUT_MARGIN))
+    .filter((_, i) => mayBeat(scouted[i], least))
     .flatMap((angle) => {
       const place = angles.indexOf(angle)
       const before = angles[place - 1] ?? angle - 0.05
@@ -148,8 +147,27 @@ function better(a: EnclosingRectangle, b: EnclosingRectangle): EnclosingRectangl
   return areaB < areaA ? b : a
 }
 
+/**
+ * Between two sides of the hull its own rectangle is least at one of them, and the true one is never smaller: so the true area near a side can
+ * fall below what it is there by no more than the chords are wrong on the four sides of the rectangle.
+ */
+const mayBeat = (scouted: EnclosingRectangle | undefined, least: number): boolean =>
+  scouted !== undefined &&
+  areaOf(scouted) - 2 * SCOUT_CHORD_MM * (scouted.widthMm + scouted.heightMm) <= least
+
+/** Whether a segment comes near enough to the coarse hull to lie on the true one: only such segments bound a rectangle. */
+function reachesHull(segment: Segment, hull: readonly Point[]): boolean {
+  return flattened([segment], SCOUT_CHORD_MM).some((point) =>
+    hull.some((corner, i) => {
+      const next = hull[(i + 1) % hull.length] ?? corner
+      const along = minus(next, corner)
+      return cross(along, minus(point, corner)) <= 2 * SCOUT_CHORD_MM * magnitudeOf(along)
+    }),
+  )
+}
+
 /** Directions of the hull's sides brought to −45° < angle ≤ 45°, in order. */
-function sideAnglesOf(hull: readonly { readonly x: number; readonly y: number }[]): readonly number[] {
+function sideAnglesOf(hull: readonly Point[]): readonly number[] {
   const quarter = Math.PI / 2
   const angles = hull.map((corner, i) => {
     const next = hull[(i + 1) % hull.length] ?? corner
@@ -170,7 +188,7 @@ function narrowed(path: Path, from: number, to: number): number {
   let q = a + GOLDEN * (b - a)
   let atP = area(p)
   let atQ = area(q)
-  while (b - a > 1e-12) {
+  while (b - a > 1e-10) {
     if (atP <= atQ) {
       ;[b, q, atQ] = [q, p, atP]
       p = b - GOLDEN * (b - a)
