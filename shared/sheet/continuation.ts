@@ -27,24 +27,31 @@ const namedPaper = (name: Paper['name']): Paper => {
   return paper
 }
 
-/** What the first sheet had no room for: the rest of the members, and a note too long to stand beside the drawing. */
-export function continuationPages(input: SheetInput, rows: readonly MemberRow[]): FurtherPage[] {
-  return [...tablePages(input, rows), ...notePages(input.mill?.notes ?? '')]
+/**
+ * What the first sheet had no room for: the rest of the members, and a note too long to stand beside the drawing.
+ * stripMm stays free at the top of each, for what stands there in large letters.
+ */
+export function continuationPages(
+  input: SheetInput,
+  rows: readonly MemberRow[],
+  stripMm: number,
+): FurtherPage[] {
+  return [...tablePages(input, rows, stripMm), ...notePages(input.mill?.notes ?? '', stripMm)]
 }
 
 /** A4 while one takes what is left, else A3: a column at the left from top to bottom, another above the title block. */
-function tablePages(input: SheetInput, rows: readonly MemberRow[]): FurtherPage[] {
+function tablePages(input: SheetInput, rows: readonly MemberRow[], stripMm: number): FurtherPage[] {
   if (rows.length === 0) return []
   const columnsOn = (paper: Paper) => {
     const { left, right, top, bottom } = drawingSpaceOf(paper)
-    const aboveTitle = rowsThatFit(top - bottom - INSET_MM - TITLE_BLOCK_HEIGHT_MM - GAP_MM)
-    const last = { x: right - TITLE_BLOCK_WIDTH_MM, rows: aboveTitle }
+    const aboveTitle = rowsThatFit(top - bottom - INSET_MM - stripMm - TITLE_BLOCK_HEIGHT_MM - GAP_MM)
+    const last = { x: right - TITLE_BLOCK_WIDTH_MM + INSET_MM, rows: aboveTitle }
     return paper.name === 'A4' ? [last] : [{ x: left + INSET_MM, rows: aboveTitle }, last]
   }
   const small = namedPaper('A4')
   const room = columnsOn(small)[0]?.rows ?? 0
   const paper = rows.length <= room ? small : namedPaper('A3')
-  const y = drawingSpaceOf(paper).top - INSET_MM
+  const y = drawingSpaceOf(paper).top - INSET_MM - stripMm
   let rest = rows
   const items = columnsOn(paper).flatMap(({ x, rows: count }) => {
     const shown = rest.slice(0, count)
@@ -52,13 +59,14 @@ function tablePages(input: SheetInput, rows: readonly MemberRow[]): FurtherPage[
     if (shown.length === 0) return []
     return hungAt(memberTable(shown, 'Members, continued', input.section.gesso !== 0), { x, y })
   })
-  return [{ paper, items }, ...tablePages(input, rest)]
+  return [{ paper, items }, ...tablePages(input, rest, stripMm)]
 }
 
-function notePages(notes: string): FurtherPage[] {
+function notePages(notes: string, stripMm: number): FurtherPage[] {
   if (notes.length <= LONGEST_NOTE) return []
   const paper = namedPaper('A4')
-  const { left, right, top, bottom } = drawingSpaceOf(paper)
+  const { left, right, top: frameTop, bottom } = drawingSpaceOf(paper)
+  const top = frameTop - stripMm
   const x = left + INSET_MM
   const lines = wrappedLines(notes, right - INSET_MM - x, LETTER_MM.small)
   const start = top - INSET_MM - HEADING_MM

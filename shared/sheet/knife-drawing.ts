@@ -8,6 +8,7 @@ import { hungAt } from './block'
 import type { Block } from './block'
 import { LETTER_MM, LINE_WIDTH_MM, linesItem, pathItem, textItem } from './drawing'
 import type { Drawing, DrawingItem } from './drawing'
+import { cutToWidth, textWidthMm } from './lettering'
 import { checkBar } from './notes'
 import { ordinatesBeside } from './ordinates'
 import { paperFrame } from './paper-frame'
@@ -30,10 +31,11 @@ export interface KnifeDrawingInput extends TitleBlockInput {
 
 const INSET_MM = 5
 const GAP_MM = 7
-const SHOUT_MM = 7
+/** The note and two lines beneath it. */
+const HEADER_MM = 20
 const ROW_MM = 3.8
 const TABLE_HEADING_MM = 2 * ROW_MM
-const COLUMN_MM = 57
+const COLUMN_MM = 56
 /** The first page shows at least this much of the table, rows. */
 const LEAST_ROWS = 10
 const MICRON_PLACES = { mm: 2, in: 3 } as const
@@ -53,7 +55,7 @@ export function knifeDrawingOf(input: KnifeDrawingInput): Drawing[] {
   }
   const space = drawingSpaceOf(paper)
   const left = space.left + INSET_MM
-  const viewTop = space.top - INSET_MM - 3 * SHOUT_MM
+  const viewTop = space.top - INSET_MM - HEADER_MM
   const barTop = viewTop - view.heightMm - GAP_MM
   const chunks = tableChunks(input.table, paper, barTop - bar.heightMm - GAP_MM)
   return chunks.map(({ rows, top }, index) => {
@@ -66,7 +68,7 @@ export function knifeDrawingOf(input: KnifeDrawingInput): Drawing[] {
     })
     const items: DrawingItem[] = [
       ...paperFrame(paper),
-      ...shout(input, left, space.top - INSET_MM),
+      ...shout(input, left, space.top - INSET_MM, space.right - INSET_MM - left),
       ...tableItems(rows, input.unit, { x: left, y: top }, rowsPerColumn(top, paper)),
       ...hungAt(title, { x: space.right - TITLE_BLOCK_WIDTH_MM, y: space.bottom + TITLE_BLOCK_HEIGHT_MM }),
     ]
@@ -119,7 +121,7 @@ function knifeView({ path, unit }: KnifeDrawingInput): KnifeView {
 
 function takes(paper: Paper, view: KnifeView, bar: Block): boolean {
   const { left, right, top } = drawingSpaceOf(paper)
-  const used = INSET_MM + 3 * SHOUT_MM + view.heightMm + GAP_MM + bar.heightMm + GAP_MM
+  const used = INSET_MM + HEADER_MM + view.heightMm + GAP_MM + bar.heightMm + GAP_MM
   return view.widthMm <= right - left - 2 * INSET_MM && rowsPerColumn(top - used, paper) >= LEAST_ROWS
 }
 
@@ -140,7 +142,7 @@ interface Chunk {
 }
 
 function tableChunks(rows: readonly KnifeRow[], paper: Paper, firstTop: number): Chunk[] {
-  const restTop = drawingSpaceOf(paper).top - INSET_MM - 3 * SHOUT_MM
+  const restTop = drawingSpaceOf(paper).top - INSET_MM - HEADER_MM
   const chunks: Chunk[] = []
   let rest = rows
   do {
@@ -201,12 +203,16 @@ function tableColumn(rows: readonly KnifeRow[], unit: LengthUnit, { x, y }: Poin
   ]
 }
 
-function shout({ note, head }: KnifeDrawingInput, x: number, top: number): DrawingItem[] {
+function shout({ note, head }: KnifeDrawingInput, x: number, top: number, widthMm: number): DrawingItem[] {
   const seen = 'Seen on the face of the knife: the mirror of the section, x from the sight edge at the right.'
+  const fits = textWidthMm(note, LETTER_MM.title, 'semibold') <= widthMm
+  const heightMm = fits ? LETTER_MM.title : LETTER_MM.heading
+  const shown = cutToWidth(note, widthMm, heightMm, 'semibold')
+  const foot = top - LETTER_MM.title
   return [
-    textItem('notes', { x, y: top - LETTER_MM.title }, note, LETTER_MM.title, { weight: 'semibold' }),
-    textItem('notes', { x, y: top - LETTER_MM.title - 5 }, head, LETTER_MM.small),
-    textItem('notes', { x, y: top - LETTER_MM.title - 9 }, seen, LETTER_MM.small),
+    textItem('notes', { x, y: foot }, shown, heightMm, { weight: 'semibold' }),
+    textItem('notes', { x, y: foot - 5 }, cutToWidth(head, widthMm, LETTER_MM.small), LETTER_MM.small),
+    textItem('notes', { x, y: foot - 9 }, seen, LETTER_MM.small),
   ]
 }
 

@@ -15,20 +15,20 @@ interface Column {
   readonly anchor: Anchor
 }
 
-/** 180 mm in all, as wide as the title block beneath it. */
+/** 170 mm in all: the title block's width less a blank of 5 mm at either side. */
 const COLUMNS: readonly Column[] = [
   { heading: 'no.', widthMm: 9, anchor: 'end' },
   { heading: 'member', widthMm: 25, anchor: 'start' },
   { heading: 'width', widthMm: 16, anchor: 'end' },
-  { heading: 'basis', widthMm: 20, anchor: 'start' },
+  { heading: 'basis', widthMm: 19, anchor: 'start' },
   { heading: 'rise', widthMm: 16, anchor: 'end' },
-  { heading: 'basis', widthMm: 20, anchor: 'start' },
-  { heading: 'x', widthMm: 17, anchor: 'end' },
-  { heading: 'y', widthMm: 17, anchor: 'end' },
-  { heading: 'radius', widthMm: 40, anchor: 'start' },
+  { heading: 'basis', widthMm: 19, anchor: 'start' },
+  { heading: 'x', widthMm: 16, anchor: 'end' },
+  { heading: 'y', widthMm: 16, anchor: 'end' },
+  { heading: 'radius', widthMm: 34, anchor: 'start' },
 ]
 
-const TABLE_WIDTH_MM = 180
+export const TABLE_WIDTH_MM = 170
 const ROW_MM = 4
 const CELL_PADDING_MM = 1.5
 const HEADING_MM = 12

@@ -78,10 +78,9 @@ export function curveText(
       return `${member.count} × ${radiiText(wood, printer)}`
     case 'quirk':
       return `${member.shape === 'v' ? 'V' : 'square'}, deep ${printer.length(member.depth)}`
-    case 'thumb': {
-      const axes = `${printer.length(member.width)} × ${printer.length(Math.abs(member.rise))}`
-      return gessoMm === 0 ? `ellipse ${axes}` : `ellipse ${axes} less gesso`
-    }
+    case 'thumb':
+      if (gessoMm !== 0) return 'ellipse less gesso'
+      return `ellipse ${printer.length(member.width)} × ${printer.length(Math.abs(member.rise))}`
     case 'free':
       return 'see DXF'
     default:

@@ -88,23 +88,30 @@ export function millRows(mill: MillText, vocabulary: SheetInput['vocabulary']): 
   ]
 }
 
+/** What is asked of the mill, or nothing where no order is. */
+export function orderBlock({ mill, vocabulary }: SheetInput, widthMm: number): Block | undefined {
+  return mill === undefined ? undefined : notesBlock('To run', millRows(mill, vocabulary), widthMm)
+}
+
+export interface SheetNotesOptions {
+  readonly scaleText: string
+  readonly widthMm: number
+  /** Whether the order stands among the notes, or elsewhere on the sheet. */
+  readonly withOrder: boolean
+}
+
 /** Figures, order and cautions in the width given: in two columns where it is wide. */
-export function sheetNotes(
-  input: SheetInput,
-  printer: LengthPrinter,
-  scaleText: string,
-  widthMm: number,
-): Block {
+export function sheetNotes(input: SheetInput, printer: LengthPrinter, options: SheetNotesOptions): Block {
+  const { scaleText, widthMm, withOrder } = options
   const isWide = widthMm >= TWO_COLUMNS_FROM_MM
   const columnMm = isWide ? (widthMm - COLUMN_GAP_MM) / 2 : widthMm
   const figures = notesBlock('Section', sectionRows(input, printer), columnMm)
-  const order =
-    input.mill === undefined ? [] : [notesBlock('To run', millRows(input.mill, input.vocabulary), columnMm)]
+  const order = withOrder ? orderBlock(input, columnMm) : undefined
   const sentences = [...standingCautions(input, scaleText), ...(input.cautions ?? [])]
   const cautions = sentencesBlock('Take care', sentences, columnMm)
-  if (!isWide) return stacked([figures, ...order, cautions], BLOCK_GAP_MM)
-  const left = stacked(order.length === 0 ? [figures] : [figures, ...order], BLOCK_GAP_MM)
-  return besideOneAnother(left, cautions)
+  const left = order === undefined ? [figures] : [figures, order]
+  if (!isWide) return stacked([...left, cautions], BLOCK_GAP_MM)
+  return besideOneAnother(stacked(left, BLOCK_GAP_MM), cautions)
 }
 
 function besideOneAnother(left: Block, right: Block): Block {

@@ -1,36 +1,26 @@
 import { Failure } from '@shared/failure'
-import type { Point } from '@shared/geometry'
 import { woodFaceOf } from '@shared/section'
+import { arrangedOn, INSET_MM, shoutHeight } from './arrangement'
+import type { Layout, Parts } from './arrangement'
 import { hungAt } from './block'
 import type { Block } from './block'
 import { continuationPages } from './continuation'
 import { LETTER_MM, textItem } from './drawing'
 import type { Drawing, DrawingItem, ModelPlacement } from './drawing'
 import { radiiOf } from './member-text'
-import { memberRowsOf, memberTable, rowsThatFit, tableHeightMm } from './member-table'
-import type { MemberRow } from './member-table'
+import { memberRowsOf, memberTable } from './member-table'
 import { modelNotes } from './model-notes'
 import { checkBar } from './notes'
 import { paperFrame } from './paper-frame'
 import { drawingSpaceOf, PAPERS, SCALES, TITLE_BLOCK_WIDTH_MM } from './paper-sizes'
-import type { Paper, Scale, Space } from './paper-sizes'
+import type { Paper } from './paper-sizes'
 import { shiftedItems } from './placement'
 import { lengthPrinterOf } from './printing'
 import type { LengthPrinter } from './printing'
 import { sectionViewOf } from './section-view'
-import type { SectionView } from './section-view'
 import type { SheetInput } from './sheet-input'
-import { sheetNotes } from './sheet-notes'
-import { statusText, TITLE_BLOCK_HEIGHT_MM, titleBlock } from './title-block'
+import { statusText, titleBlock } from './title-block'
 import type { TitleBlockFacts } from './title-block'
-
-/** Blank inside the frame and between the parts of a sheet, mm. */
-const INSET_MM = 5
-const GAP_MM = 7
-const VIEW_HEADING_MM = 10
-const SHOUT_MM = LETTER_MM.shout + 6
-/** A table that flows on to the next sheet shows at least this much on the first, rows. */
-const LEAST_ROWS = 8
 
 /**
  * The profile sheet of a section: the smallest ISO 5457 sheet on which the section stands at 1:1 with all that belongs
@@ -43,9 +33,7 @@ export function sheetsOf(input: SheetInput): Drawing[] {
   for (const scale of SCALES) {
     const view = sectionViewOf(input.section, printer, scale.ratio)
     for (const paper of PAPERS) {
-      const layout = arrangementsFor(paper)
-        .map((arrange) => arrange({ ...parts, view, scale, paper }))
-        .find((found) => found !== undefined)
+      const layout = arrangedOn({ ...parts, view, scale, paper })
       if (layout !== undefined) return pagesFrom(input, parts, layout)
     }
   }
@@ -85,13 +73,6 @@ function printerFor({ unit, section, measures }: SheetInput): LengthPrinter {
   ])
 }
 
-interface Parts {
-  readonly input: SheetInput
-  readonly printer: LengthPrinter
-  readonly rows: readonly MemberRow[]
-  readonly bar: Block
-}
-
 const facts = (
   printer: LengthPrinter,
   scale: string,
@@ -114,126 +95,10 @@ function partsOf(input: SheetInput, printer: LengthPrinter): Parts {
   }
 }
 
-interface Attempt extends Parts {
-  readonly view: SectionView
-  readonly scale: Scale
-  readonly paper: Paper
-}
-
-/** Where everything goes on the first page; corners are upper left. */
-interface Layout {
-  readonly paper: Paper
-  readonly scale: Scale
-  readonly view: SectionView
-  /** Of the view's own extents, heading excluded. */
-  readonly viewCorner: Point
-  readonly headingTop: number
-  readonly blocks: readonly { readonly block: Block; readonly corner: Point }[]
-  readonly tableCorner: Point
-  readonly rowsShown: number
-}
-
-type Arrangement = (attempt: Attempt) => Layout | undefined
-
-const arrangementsFor = (paper: Paper): Arrangement[] =>
-  paper.name === 'A4' ? [arrangedInOneColumn] : [arrangedBeside, arrangedAbove]
-
-/** The strip in large letters that says a sheet is no order to cut. */
-const shoutHeight = ({ input }: Attempt): number => (statusText(input) === 'approved' ? 0 : SHOUT_MM)
-
-const viewWidth = (view: SectionView): number => view.right - view.left
-const viewHeight = (view: SectionView): number => view.top - view.bottom
-
-/** A4: view, table, notes, bar and title block under one another; all of the table or not at all. */
-function arrangedInOneColumn(attempt: Attempt): Layout | undefined {
-  const { paper, view, scale, rows, bar } = attempt
-  const space = drawingSpaceOf(paper)
-  const left = space.left + INSET_MM
-  const widthMm = space.right - INSET_MM - left
-  const notes = sheetNotes(attempt.input, attempt.printer, scale.text, widthMm)
-  const viewTop = space.top - INSET_MM - shoutHeight(attempt) - VIEW_HEADING_MM
-  const tableTop = viewTop - viewHeight(view) - GAP_MM
-  const notesTop = tableTop - tableHeightMm(rows.length) - GAP_MM
-  const barTop = notesTop - notes.heightMm - GAP_MM
-  const fits = viewWidth(view) <= widthMm && barTop - bar.heightMm >= space.bottom + TITLE_BLOCK_HEIGHT_MM + 2
-  if (!fits) return undefined
-  return {
-    ...{ paper, scale, view },
-    headingTop: viewTop + VIEW_HEADING_MM,
-    viewCorner: { x: centred(left, widthMm, viewWidth(view)), y: viewTop },
-    blocks: [
-      { block: notes, corner: { x: left, y: notesTop } },
-      { block: bar, corner: { x: left, y: barTop } },
-    ],
-    tableCorner: { x: space.left, y: tableTop },
-    rowsShown: rows.length,
-  }
-}
-
-const centred = (left: number, widthMm: number, own: number): number => left + (widthMm - own) / 2
-
-/** What the right-hand column of a lying sheet takes: the table from the top down, the title block in the corner. */
-function rowsInRightColumn({ rows }: Attempt, space: Space, top: number): number | undefined {
-  const fitting = Math.min(rows.length, rowsThatFit(top - space.bottom - TITLE_BLOCK_HEIGHT_MM - GAP_MM))
-  return fitting === rows.length || fitting >= LEAST_ROWS ? fitting : undefined
-}
-
-/** The view and the notes at the left, the table at the right above the title block. */
-function arrangedBeside(attempt: Attempt): Layout | undefined {
-  const { paper, view, scale, bar } = attempt
-  const space = drawingSpaceOf(paper)
-  const left = space.left + INSET_MM
-  const widthMm = space.right - TITLE_BLOCK_WIDTH_MM - GAP_MM - left
-  const notes = sheetNotes(attempt.input, attempt.printer, scale.text, widthMm)
-  const viewTop = space.top - INSET_MM - shoutHeight(attempt) - VIEW_HEADING_MM
-  const barTop = space.bottom + INSET_MM + bar.heightMm
-  const notesTop = barTop + GAP_MM + notes.heightMm
-  const rowsShown = rowsInRightColumn(attempt, space, space.top - INSET_MM)
-  const slack = viewTop - viewHeight(view) - GAP_MM - notesTop
-  const fits = viewWidth(view) <= widthMm && slack >= 0
-  if (!fits || bar.widthMm > widthMm || rowsShown === undefined) return undefined
-  return {
-    ...{ paper, scale, view, rowsShown },
-    headingTop: viewTop + VIEW_HEADING_MM,
-    viewCorner: { x: centred(left, widthMm, viewWidth(view)), y: viewTop - slack / 2 },
-    blocks: [
-      { block: notes, corner: { x: left, y: notesTop } },
-      { block: bar, corner: { x: left, y: barTop } },
-    ],
-    tableCorner: { x: space.right - TITLE_BLOCK_WIDTH_MM, y: space.top - INSET_MM },
-  }
-}
-
-/** A wide view across the sheet; beneath it the notes at the left, the table and the title block at the right. */
-function arrangedAbove(attempt: Attempt): Layout | undefined {
-  const { paper, view, scale, bar } = attempt
-  const space = drawingSpaceOf(paper)
-  const left = space.left + INSET_MM
-  const fullMm = space.right - INSET_MM - left
-  const widthMm = space.right - TITLE_BLOCK_WIDTH_MM - GAP_MM - left
-  const notes = sheetNotes(attempt.input, attempt.printer, scale.text, widthMm)
-  const viewTop = space.top - INSET_MM - shoutHeight(attempt) - VIEW_HEADING_MM
-  const under = viewTop - viewHeight(view) - GAP_MM
-  const barTop = space.bottom + INSET_MM + bar.heightMm
-  const rowsShown = rowsInRightColumn(attempt, space, under)
-  const fits = viewWidth(view) <= fullMm && under - notes.heightMm - GAP_MM >= barTop
-  if (!fits || bar.widthMm > widthMm || rowsShown === undefined) return undefined
-  return {
-    ...{ paper, scale, view, rowsShown },
-    headingTop: viewTop + VIEW_HEADING_MM,
-    viewCorner: { x: centred(left, fullMm, viewWidth(view)), y: viewTop },
-    blocks: [
-      { block: notes, corner: { x: left, y: under } },
-      { block: bar, corner: { x: left, y: barTop } },
-    ],
-    tableCorner: { x: space.right - TITLE_BLOCK_WIDTH_MM, y: under },
-  }
-}
-
 function pagesFrom(input: SheetInput, parts: Parts, layout: Layout): Drawing[] {
   const { printer, rows } = parts
   const { paper, scale, rowsShown } = layout
-  const further = continuationPages(input, rows.slice(rowsShown))
+  const further = continuationPages(input, rows.slice(rowsShown), shoutHeight(input))
   const count = 1 + further.length
   const title = (sheetNumber: number, scaleText: string) =>
     titleBlock(input, facts(printer, scaleText, sheetNumber, count))
@@ -268,7 +133,7 @@ function pageWithTitle(
     title: sheetTitle(input),
     widthMm: paper.widthMm,
     heightMm: paper.heightMm,
-    items: [...paperFrame(paper), ...items, ...titleItems(title, paper)],
+    items: [...paperFrame(paper), ...shoutItems(input, paper), ...items, ...titleItems(title, paper)],
   }
 }
 

@@ -220,7 +220,7 @@ describe('the drawing of the corrected knife', () => {
   it('says in large letters that it is no template, on every page, and is legible', () => {
     for (const page of pages) {
       const note = page.items.find((item) => item.kind === 'text' && item.text === CORRECTED_NOTE)
-      expect(note?.kind === 'text' && note.heightMm >= 5).toBe(true)
+      expect(note?.kind === 'text' && note.heightMm >= 3.5).toBe(true)
       expect(overlappingTexts(page)).toEqual([])
       expect(itemsOutside(page, drawingSpaceOf(page))).toEqual([])
     }

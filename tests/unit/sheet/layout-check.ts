@@ -72,13 +72,23 @@ function strokesOf(item: DrawingItem): (readonly [Point, Point])[] {
   }
 }
 
-/** Texts with a line through them. Filled grounds under letters are meant; only strokes count. */
+/** A line this near to letters touches them, mm. */
+const CLEARANCE_MM = 0.25
+
+const grown = ({ left, right, bottom, top }: Box): Box => ({
+  left: left - CLEARANCE_MM,
+  right: right + CLEARANCE_MM,
+  bottom: bottom - CLEARANCE_MM,
+  top: top + CLEARANCE_MM,
+})
+
+/** Texts with a line through them or against them. Filled grounds under letters are meant; only strokes count. */
 export function struckTexts(drawing: Drawing): string[] {
   const strokes = drawing.items
     .filter((item) => item.kind === 'lines' || (item.kind === 'path' && item.lineWidthMm > 0))
     .flatMap(strokesOf)
   return textsOf(drawing)
-    .filter((item) => strokes.some(([from, to]) => crosses(from, to, textBox(item))))
+    .filter((item) => strokes.some(([from, to]) => crosses(from, to, grown(textBox(item)))))
     .map(({ text }) => text)
 }
 

@@ -57,6 +57,16 @@ describe('the layout of the profile sheet', () => {
     },
   )
 
+  it('says on every sheet of a draft, in large letters, that it is one', () => {
+    const pages = sheetWith(climbingMembers(200, 2), { state: { kind: 'draft' } })
+    expect(pages.length).toBeGreaterThan(1)
+    for (const { items } of pages) {
+      const large = items.filter((item) => item.kind === 'text' && item.heightMm >= 10)
+      expect(large.map((item) => item.kind === 'text' && item.text)).toEqual(['draft, not approved'])
+    }
+    expectLegible(pages)
+  })
+
   it('keeps them apart when every field is as long as it may be', () => {
     const long = 'Wharves and warehouses seen across the inner harbour at low water, toward evening '
       .repeat(6)
