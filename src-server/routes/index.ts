@@ -1,3 +1,4 @@
+import { COMMISSION_FILE_ROUTES } from './commission-files'
 import { COMMISSION_ROUTES } from './commissions'
 import { DRAFT_ROUTES } from './drafts'
 import { HEALTH_ROUTES } from './health'
@@ -15,6 +16,7 @@ export const ROUTES: readonly Route[] = [
   ...PEOPLE_ROUTES,
   ...WORKSHOP_ROUTES,
   ...COMMISSION_ROUTES,
+  ...COMMISSION_FILE_ROUTES,
   ...PHOTOGRAPH_ROUTES,
   ...DRAFT_ROUTES,
   ...WAITING_ROUTES,

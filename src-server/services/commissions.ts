@@ -11,6 +11,7 @@ import type {
 } from '@shared/contracts'
 import { standingOf } from '@shared/course'
 import type { Standing } from '@shared/course'
+import type { DraftSection } from '@shared/section'
 import { Commission } from '../models/commission'
 import { Client } from '../models/person'
 import { now, today } from './clock'
@@ -131,11 +132,12 @@ export async function takeOnCommission(actor: Actor, request: NewCommission): Pr
   return readCommission(actor, id)
 }
 
-/** Makes the rows of a new commission: itself, its bare draft, the first entry of its trail. Gives its key. */
+/** Makes the rows of a new commission: itself, its draft (bare, or the section given), the first entry of its trail. Gives its key. */
 export async function enterCommission(
   tx: Tx,
   actor: Actor,
   { clientId, title, artist, accession, due }: Omit<NewCommission, 'operationId'>,
+  section?: DraftSection,
 ): Promise<string> {
   const client = await Client.findByPk(clientId, { transaction: tx })
   if (client === null || client.state !== 'active') {
@@ -148,7 +150,7 @@ export async function enterCommission(
     { number, clientId, title, artist, accession, due, createdById: actor.personId, createdAt: now() },
     { transaction: tx },
   )
-  await enterDraft(tx, commission.id)
+  await enterDraft(tx, commission.id, section)
   await enterTrail(tx, {
     commissionId: commission.id,
     actor,

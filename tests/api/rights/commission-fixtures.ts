@@ -133,4 +133,21 @@ export const COMMISSION_FIXTURES: readonly RightsFixture[] = [
       },
     }),
   },
+  {
+    route: 'get /commissions/:id/file',
+    ...staffShownToReaders,
+    target: async (world, side) => ({ path: `/commissions/${(await commissionOn(world, side)).id}/file` }),
+  },
+  {
+    route: 'post /commissions/import',
+    own: { manager: 'done', designer: 'done', curator: 403, mill: 404, bench: 403 },
+    target: async (world, side) => ({
+      path: '/commissions/import',
+      body: {
+        operationId: randomUUID(),
+        clientId: clientOn(world, side),
+        file: { listel: 1, title: 'Harbour' },
+      },
+    }),
+  },
 ]
