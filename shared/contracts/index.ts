@@ -55,6 +55,8 @@ export {
   LettersAnswer,
   AttachmentParams,
   TokenParams,
+  RackAnswer,
+  CutListsAnswer,
 } from './params'
 export {
   SignInRequest,

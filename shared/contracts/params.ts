@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { CommissionLine, MeasurementAnswer, Stage, TrailLine, WaitingLine } from './commissions'
 import { ClientAnswer, MillAnswer, MillCardAnswer, PersonAnswer, SawCardAnswer } from './people'
+import { CutListLine, RackPieceAnswer } from './lengths'
 import { LetterBrief, OrderLine } from './orders'
 import { IssueLine } from './review'
 import { Id } from './scalars'
@@ -49,3 +50,5 @@ export const OrdersAnswer = z.array(OrderLine)
 export const LettersAnswer = z.array(LetterBrief)
 export const AttachmentParams = z.strictObject({ id: Id, index: z.coerce.number().int().min(0).max(100) })
 export const TokenParams = z.strictObject({ token: z.string().min(20).max(200) })
+export const RackAnswer = z.array(RackPieceAnswer)
+export const CutListsAnswer = z.array(CutListLine)

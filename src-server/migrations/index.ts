@@ -7,6 +7,7 @@ import { review } from './20261201-1050-review'
 import { orders } from './20261201-1060-orders'
 import { letters } from './20261201-1070-letters'
 import { rack } from './20261201-1080-rack'
+import { cutLists } from './20261201-1090-cut-lists'
 import type { Migration } from './migration'
 
 /** Every migration, in order. A list and not a folder, so that it survives being bundled. */
@@ -20,4 +21,5 @@ export const MIGRATIONS: readonly Migration[] = [
   orders,
   letters,
   rack,
+  cutLists,
 ]

@@ -1,5 +1,6 @@
 import type { Sequelize } from 'sequelize'
 import { bindCommissions } from './commission'
+import { bindCutLists } from './cut-list'
 import { bindDrafts } from './draft'
 import { bindFiles } from './file'
 import { bindOperations } from './operation'
@@ -26,6 +27,7 @@ export const MODEL_FAMILIES: readonly ((sequelize: Sequelize) => void)[] = [
   bindOrders,
   bindLetters,
   bindRack,
+  bindCutLists,
   bindTrail,
   bindOperations,
 ]

@@ -1,5 +1,5 @@
 import type { DecisionView, DifferenceView, IssueLineView, IssueView, RemarkView } from '@shared/contracts'
-import type { differenceOf, Section } from '@shared/section'
+import type { differenceOf, Section, SectionChange } from '@shared/section'
 import type { Commission } from '../models/commission'
 import type { Decision, Issue, Remark, RemarkEntry } from '../models/review'
 
@@ -90,6 +90,22 @@ export function presentDifference(found: {
     fromSection: fromSection as DifferenceView['fromSection'],
     areaBetweenMm2: difference?.areaBetweenMm2 ?? null,
     greatestDistanceMm: difference?.greatestDistanceMm ?? null,
-    changes: difference?.changes.map(({ says }) => ({ says })) ?? [],
+    changes: difference?.changes.map((change) => ({ says: saysOfChange(change) })) ?? [],
   }
+}
+
+/** A change in words: `member 3, width: 20 → 22`. */
+function saysOfChange({ path, before, after }: SectionChange): string {
+  const parts = path.split('/').slice(1)
+  const place = parts[0] === 'members' ? [`member ${Number(parts[1]) + 1}`, ...parts.slice(2)] : parts
+  return `${place.join(', ')}: ${shown(before)} → ${shown(after)}`
+}
+
+function shown(value: unknown): string {
+  if (value === null) return 'none'
+  if (typeof value !== 'object') return String(value)
+  if ('kind' in value && 'width' in value && 'rise' in value) {
+    return `${String(value.kind)} ${String(value.width)} wide, rise ${String(value.rise)}`
+  }
+  return JSON.stringify(value)
 }

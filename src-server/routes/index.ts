@@ -2,7 +2,11 @@ import { COMMISSION_FILE_ROUTES } from './commission-files'
 import { COMMISSION_ROUTES } from './commissions'
 import { DRAFT_ROUTES } from './drafts'
 import { HEALTH_ROUTES } from './health'
+import { ISSUE_ROUTES } from './issues'
+import { LENGTH_ROUTES } from './lengths'
+import { ORDER_ROUTES } from './orders'
 import { PEOPLE_ROUTES } from './people'
+import { POST_ROUTES } from './post'
 import { PHOTOGRAPH_ROUTES } from './photographs'
 import type { Route } from './route'
 import { SESSION_ROUTES } from './session'
@@ -19,5 +23,9 @@ export const ROUTES: readonly Route[] = [
   ...COMMISSION_FILE_ROUTES,
   ...PHOTOGRAPH_ROUTES,
   ...DRAFT_ROUTES,
+  ...ISSUE_ROUTES,
+  ...ORDER_ROUTES,
+  ...LENGTH_ROUTES,
+  ...POST_ROUTES,
   ...WAITING_ROUTES,
 ]

@@ -3,6 +3,7 @@ import type { CommissionFacts } from '@shared/course'
 import { Measurement, Picture } from '../models/commission'
 import { Draft } from '../models/draft'
 import { Photograph } from '../models/photograph'
+import { lengthsKnown } from './lengths-known'
 import { ordersKnown } from './orders-known'
 import { issuesKnown } from './review-known'
 
@@ -28,6 +29,7 @@ export const FACT_SOURCES: readonly FactSource[] = [
   draftsKnown,
   issuesKnown,
   ordersKnown,
+  lengthsKnown,
 ]
 
 /** All facts of a commission, with what the list says besides. */

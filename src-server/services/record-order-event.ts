@@ -46,7 +46,7 @@ export const recordOrderEvent = (actor: Actor, orderId: string, request: Request
         await enterTrail(tx, {
           commissionId: commission.id,
           actor,
-          act: `order-${event}`.slice(0, 32),
+          act: `order-${event}`,
           says: `${order.number}: ${event.replaceAll('-', ' ')}${onBehalfOfMill ? ", on the mill's behalf" : ''}`,
           document: {
             orderId,

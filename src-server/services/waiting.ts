@@ -21,7 +21,7 @@ export const hasRole = (actor: Actor, role: RoleOfPerson): boolean =>
   actor.memberships.some((membership) => membership.role === role)
 
 /** Open commissions that the actor may see, with where they stand. */
-async function openCommissions(actor: Actor): Promise<StandingCommission[]> {
+export async function openCommissions(actor: Actor): Promise<StandingCommission[]> {
   const commissions = await Commission.findAll({
     where: { ...seenBy(actor), state: 'open' },
     include: [withClient],

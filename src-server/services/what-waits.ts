@@ -1,4 +1,5 @@
 import type { Actor } from '@shared/access'
+import { benchWaits, planWaits } from './length-waits'
 import { orderWaits, postWaits } from './order-waits'
 import { reviewWaits } from './review-waits'
 import { drawingWaits, overdueWaits } from './waiting'
@@ -9,6 +10,8 @@ const WAITING_SOURCES: readonly WaitingSource[] = [
   drawingWaits,
   reviewWaits,
   orderWaits,
+  planWaits,
+  benchWaits,
   postWaits,
   overdueWaits,
 ]
