@@ -62,6 +62,10 @@ export const useSessionStore = defineStore('session', () => {
   const forget = () => {
     session.value = null
   }
+  /** Reads again who is signed in and how the workshop is set. */
+  async function refresh(): Promise<void> {
+    session.value = await readSession()
+  }
   async function prefer(choice: Parameters<typeof setPreferences>[0]): Promise<void> {
     session.value = await setPreferences(choice)
   }
@@ -80,6 +84,7 @@ export const useSessionStore = defineStore('session', () => {
     enterAsFirstManager,
     leave,
     forget,
+    refresh,
     prefer,
   }
 })
