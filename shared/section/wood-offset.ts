@@ -109,6 +109,7 @@ function turnBetween(a: Segment, b: Segment, turnRad: number): number {
   return curvatureAt(a, 1) + curvatureAt(b, 0) > 0 ? -Math.PI : Math.PI
 }
 
+/** A step at a break belongs to the member under the thicker gesso. */
 function joinCorner(chain: FacePiece[], corner: Corner): void {
   const { a, b, tangentA, tangentB, fromA, toB, turnRad, alongA, alongB, reachMm } = corner
   const isAlike = a.gessoMm === b.gessoMm
@@ -129,7 +130,7 @@ function joinCorner(chain: FacePiece[], corner: Corner): void {
     if (isCrossed && alongB < -POINT_MM) {
       goTo(chain, b, along(toB, tangentB, alongB - thickest))
       comeStraightTo(chain, b, toB)
-    } else goTo(chain, b, toB)
+    } else goTo(chain, a.gessoMm > b.gessoMm ? a : b, toB)
   }
 }
 
