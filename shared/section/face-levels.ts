@@ -18,15 +18,20 @@ interface Run {
   readonly pieces: readonly Segment[]
 }
 
-/** Parts of the face that stand above what lies on both sides of them: a slot of the knife. The ends of the face are open. */
+/** Parts of the face that stand above what lies on both sides of them: a slot of the knife. One that begins or ends at an edge is open. */
 export function raisedPartsOf(face: Path): readonly Relief[] {
   const runs = runsOf(face)
   return runs.flatMap((rise, index) => {
     const fall = runs[index + 1]
     if (rise.sense !== 1 || fall?.sense !== -1) return []
-    const isOpen = index === 0 || index + 1 === runs.length - 1
+    const isOpen = index === 0 || (index + 2 === runs.length && !endsLevel(fall))
     return isOpen ? [] : reliefBetween(rise, fall, 1)
   })
+}
+
+function endsLevel({ pieces }: Run): boolean {
+  const last = pieces.at(-1)
+  return last !== undefined && Math.abs(last.end.y - last.start.y) <= LEVEL_MM
 }
 
 /** Parts of the face that lie below what is on both sides of them: a tooth of the knife. */
