@@ -3,6 +3,7 @@ import type { Server } from 'node:http'
 import { buildApp } from './app'
 import { ConfigFault, readConfig } from './config'
 import type { Config } from './config'
+import { dropUploadsBefore } from './files/file-store'
 import { logOf } from './middleware/request-log'
 import { closeDatabase, openDatabase } from './models/database'
 import { WORKERS } from './workers'
@@ -10,6 +11,8 @@ import type { RunningWorker } from './services/running-worker'
 
 /** Requests under way have this long to end once a stop is asked for. */
 const GRACE_MS = 10_000
+/** An upload that was begun this long ago and is still lying there was left behind. */
+const STALE_UPLOAD_MS = 24 * 60 * 60 * 1000
 
 function configOrStop(): Config {
   try {
@@ -43,6 +46,7 @@ async function main(): Promise<void> {
   const log = logOf(config.logLevel)
   await openDatabase(config.databaseUrl)
   const server = createServer(buildApp(config))
+  await dropUploadsBefore(new Date(Date.now() - STALE_UPLOAD_MS))
   await listen(server, config)
   const workers = WORKERS.map((start) =>
     start({ smtpUrl: config.smtpUrl, log: (err, says) => log.error({ err }, says) }),

@@ -1,6 +1,6 @@
 import { createHash, randomUUID } from 'node:crypto'
 import { createReadStream } from 'node:fs'
-import { mkdir, open, rename, rm, stat } from 'node:fs/promises'
+import { mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises'
 import { dirname, join } from 'node:path'
 import { pipeline } from 'node:stream/promises'
 import type { Transaction } from 'sequelize'
@@ -30,6 +30,19 @@ export async function uploadFolder(): Promise<string> {
   const path = join(dataFolder(), 'uploads')
   await mkdir(path, { recursive: true })
   return path
+}
+
+/** Throws away uploads that a process left behind when it ended in the middle: those begun before the given time. */
+export async function dropUploadsBefore(time: Date): Promise<void> {
+  const folder = await uploadFolder()
+  for (const name of await readdir(folder)) {
+    const path = join(folder, name)
+    const found = await stat(path).catch((error: NodeJS.ErrnoException) => {
+      if (error.code === 'ENOENT') return undefined // another process took it in meanwhile
+      throw error
+    })
+    if (found !== undefined && found.mtime < time) await rm(path, { force: true })
+  }
 }
 
 /** Path of a file of the store: files/ab/cdef… */

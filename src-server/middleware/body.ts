@@ -1,8 +1,9 @@
 import { rm } from 'node:fs/promises'
 import express from 'express'
 import type { Request, RequestHandler, Response } from 'express'
-import multer, { diskStorage } from 'multer'
+import multer, { MulterError, diskStorage } from 'multer'
 import { invalid } from '@shared/contracts'
+import { Failure } from '@shared/failure'
 import { uploadFolder } from '../files/file-store'
 
 const JSON_BYTES = 1024 * 1024
@@ -34,7 +35,9 @@ export async function readUpload(
 ): Promise<{ readonly body: unknown; readonly upload: Upload }> {
   const storage = diskStorage({ destination: await uploadFolder() })
   const limits = { fileSize: mostBytes, files: 1, fields: 1, fieldSize: JSON_BYTES, parts: 2 }
-  await passed(multer({ storage, limits }).single('file'), request, response)
+  await passed(multer({ storage, limits }).single('file'), request, response).catch((error: unknown) => {
+    throw error instanceof MulterError || request.complete ? error : brokenOff(error)
+  })
   if (request.file === undefined) {
     throw invalid([{ path: '/file', code: 'missing', says: 'is missing; send a file in the field "file".' }])
   }
@@ -47,6 +50,10 @@ export async function readUpload(
     throw error
   }
 }
+
+/** Nobody is there any more to be told; what had come was thrown away. */
+const brokenOff = (cause: unknown): Failure =>
+  new Failure('input-invalid', { says: 'The upload broke off; send it again.' }, { cause })
 
 /** Throws the file away, unless it was taken into the store. */
 export const dropUpload = ({ path }: Upload): Promise<void> => rm(path, { force: true })

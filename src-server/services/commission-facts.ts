@@ -1,7 +1,7 @@
-import { Op } from 'sequelize'
+import { Op, QueryTypes } from 'sequelize'
 import type { CommissionFacts } from '@shared/course'
 import { Measurement, Picture } from '../models/commission'
-import { Draft } from '../models/draft'
+import { database } from '../models/database'
 import { Photograph } from '../models/photograph'
 import { lengthsKnown } from './lengths-known'
 import { ordersKnown } from './orders-known'
@@ -100,9 +100,15 @@ async function photographsKnown(commissionIds: readonly string[]) {
   return grouped(photographs, (own) => ({ photographs: own.length }))
 }
 
+/** The members are counted by the database: a list of commissions has no need of every drawing whole. */
 async function draftsKnown(commissionIds: readonly string[]) {
-  const drafts = await Draft.findAll({ where: { commissionId: { [Op.in]: [...commissionIds] } } })
-  return grouped(drafts, ([draft]) => ({ draftMembers: draft?.document.members.length ?? 0 }))
+  if (commissionIds.length === 0) return new Map<string, KnownOfCommission>()
+  const drafts = await database().query<{ commissionId: string; members: number }>(
+    `SELECT commission_id AS commissionId, JSON_LENGTH(document, '$.members') AS members
+     FROM draft WHERE commission_id IN (:commissionIds)`,
+    { replacements: { commissionIds }, type: QueryTypes.SELECT },
+  )
+  return grouped(drafts, ([draft]) => ({ draftMembers: draft?.members ?? 0 }))
 }
 
 /** Rows of many commissions, told apart; each group says its facts. */

@@ -1,5 +1,8 @@
 import { createHash, randomUUID } from 'node:crypto'
 import { readdir } from 'node:fs/promises'
+import { createServer } from 'node:http'
+import { connect } from 'node:net'
+import type { AddressInfo } from 'node:net'
 import { join } from 'node:path'
 import sharp from 'sharp'
 import { beforeAll, describe, expect, it } from 'vitest'
@@ -193,6 +196,33 @@ describe('a photograph that cannot be taken', () => {
     const notMultipart = await designer.agent.post(url).send({ about: about() })
     expect(notMultipart.status).toBe(400)
     expect(await leftovers()).toEqual([])
+  })
+})
+
+describe('an upload that breaks off', () => {
+  it('leaves nothing behind, and the server goes on', async () => {
+    const { id } = await aCommission()
+    const server = createServer(listel.app)
+    await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve))
+    const { port } = server.address() as AddressInfo
+    const cookie = designer.agent.jar.getCookies({
+      domain: '127.0.0.1',
+      path: '/api',
+      secure: false,
+      script: false,
+    })
+    const line = connect(port, '127.0.0.1')
+    line.write(
+      `POST /api/commissions/${id}/photographs HTTP/1.1\r\nHost: 127.0.0.1:${port}\r\nCookie: ${cookie.toValueString()}\r\n` +
+        'Content-Type: multipart/form-data; boundary=cut\r\nContent-Length: 1000000\r\n\r\n' +
+        '--cut\r\nContent-Disposition: form-data; name="file"; filename="a.png"\r\nContent-Type: image/png\r\n\r\n' +
+        'x'.repeat(50_000),
+    )
+    await expect.poll(leftovers, { timeout: 5000 }).toHaveLength(1)
+    line.destroy()
+    await expect.poll(leftovers, { timeout: 5000 }).toEqual([])
+    expect((await designer.get(`/commissions/${id}`)).body.photographs).toEqual([])
+    await new Promise((resolve) => server.close(resolve))
   })
 })
 

@@ -67,6 +67,7 @@ export async function startApplication(options: ApplicationOptions = {}) {
     clientDir: options.clientDir,
     publicUrl: 'http://127.0.0.1:4700',
     caughtMailDir: options.caughtMailDir,
+    mailFrom: 'Listel <listel@listel.example>',
     logLevel: 'silent',
   })
   const stop = async () => {

@@ -47,7 +47,7 @@ export function stranger(app: Express): HttpClient {
         path,
         await agent.post(`/api${path}`).field('about', JSON.stringify(about)).attach('file', file, name),
       ),
-    file: async (path) => judged('get', path, await agent.get(`/api${path}`).buffer(true).parse(bytesOf)),
+    file: async (path) => judged('get', path, await agent.get(`/api${path}`).buffer(true).parse(bytesParser)),
   }
 }
 
@@ -89,6 +89,10 @@ function routeOf(method: Method, path: string): Route | undefined {
     )
   })
 }
+
+/** Reads a body as bytes. The library types the response as already parsed; here it is still the stream. */
+const bytesParser = (response: Response, done: (error: Error | null, body: Buffer) => void): void =>
+  bytesOf(response as unknown as NodeJS.ReadableStream, done)
 
 function bytesOf(response: NodeJS.ReadableStream, done: (error: Error | null, body: Buffer) => void): void {
   const chunks: Buffer[] = []
