@@ -86,7 +86,7 @@ function visit(walk: Walk, step: Step): void {
 
 function mostOf({ model, demand }: Walk, { room, leastGap }: Step, kind: number): number {
   const { span, gap } = model.kinds[kind]!
-  return Math.min(demand[kind]!, Math.floor((room - Math.max(0, leastGap - gap)) / span))
+  return Math.max(0, Math.min(demand[kind]!, Math.floor((room - Math.max(0, leastGap - gap)) / span)))
 }
 
 function stepWith({ model, demand, worth }: Walk, step: Step, kind: number, count: number): Step {
