@@ -102,6 +102,15 @@ describe('intersectionsOf', () => {
     expectPlaces(PARABOLA, lineFrom(at(0.3, -0.401), at(1.7, 2.399)), [])
   })
 
+  // x² = 2x − 1 + d at x = 1 ± √d
+  it('a line that all but touches a parabola meets it twice', () => {
+    for (const d of [1e-2, 1e-4, 1e-6]) {
+      const line = lineFrom(at(0.3, -0.4 + d), at(1.7, 2.4 + d))
+      const [low, high] = [1 - Math.sqrt(d), 1 + Math.sqrt(d)]
+      expectPlaces(PARABOLA, line, [at(low, low ** 2), at(high, high ** 2)])
+    }
+  })
+
   it('an ellipse with a circle of its short axis touches at its two ends', () => {
     const ellipse = ellipseFrom({ centre: at(0, 0), semiX: 8, semiY: 5, startRad: 0.1, sweepRad: 6 })
     expectPlaces(ellipse, CIRCLE, [at(0, -5), at(0, 5)])

@@ -209,6 +209,15 @@ describe('greatestDistanceBetween', () => {
     expect(found.distance).toBeLessThanOrEqual(2 + 1e-12)
   })
 
+  // the rest of that circle over the same chord rises 10 + 8 = 18; from the chord back to it there is nowhere near as far
+  it('of the greater arc and its chord is its height, though both ends coincide', () => {
+    const half = Math.PI - Math.asin(0.6)
+    const arc = arcFromCentre(at(0, 0), 10, Math.PI / 2 + half, -2 * half)
+    const found = greatestDistanceBetween([arc], [lineFrom(arc.start, arc.end)])
+    expectWithin(found.distance, 18, { withinMm: 1e-4 })
+    expect(found.on).toBe('a')
+  })
+
   it('of a path and itself is nothing; it is alike both ways and unmoved by a turn', () => {
     fc.assert(
       fc.property(anyPath(), anyPath(), (a, b) => {

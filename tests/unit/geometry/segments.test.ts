@@ -15,23 +15,28 @@ import {
   extremaOf,
   isSingleValuedInX,
   lineFrom,
+  mirrored,
   monotonePiecesOf,
+  movedBy,
   parametersAt,
   pathSplitAtX,
   pointAt,
   pointFrom as at,
   quarterEllipseFrom,
   reversed,
+  scaledBy,
   secondDerivativeAt,
   splitAt,
   splitAtX,
   startTangentOf,
   subSegment,
   tangentAt,
+  turnedBy,
+  type Path,
   type Point,
   type Segment,
 } from '@shared/geometry'
-import { anySegment, sizeOf } from '../../helpers/arbitraries-geometry'
+import { anyAngleRad, anyEllipse, anySegment, sizeOf } from '../../helpers/arbitraries-geometry'
 import { expectWithin } from '../../helpers/expect-within'
 
 const expectPoint = (actual: Point, expected: Point, withinMm: number): void => {
@@ -189,6 +194,37 @@ describe('tangents and curvature', () => {
   })
 })
 
+describe('edits', () => {
+  it('move every point of a segment as they say, at its own parameter', () => {
+    fc.assert(
+      fc.property(anySegment(), anyT(), anyAngleRad(), (segment, t, angle) => {
+        const p = pointAt(segment, t)
+        const withinMm = 1e-11 * sizeOf([segment])
+        const only = (path: Path): Segment => {
+          const [first] = path
+          if (!first) throw new Error('a path of one has a first')
+          return first
+        }
+        expectPoint(pointAt(only(movedBy([segment], at(7, -3))), t), at(p.x + 7, p.y - 3), withinMm)
+        expectPoint(pointAt(only(mirrored([segment], 5)), t), at(10 - p.x, p.y), withinMm)
+        expectPoint(
+          pointAt(only(scaledBy([segment], 0.4, at(1, 2))), t),
+          at(1 + 0.4 * (p.x - 1), 2 + 0.4 * (p.y - 2)),
+          withinMm,
+        )
+        const [c, s] = [Math.cos(angle), Math.sin(angle)]
+        expectPoint(
+          pointAt(only(turnedBy([segment], angle, at(1, 2))), t),
+          at(1 + c * (p.x - 1) - s * (p.y - 2), 2 + s * (p.x - 1) + c * (p.y - 2)),
+          withinMm,
+        )
+      }),
+    )
+    expect(() => scaledBy([], 0)).toThrow(/above 0/)
+    expect(() => scaledBy([], -1)).toThrow(/above 0/)
+  })
+})
+
 describe('splitting', () => {
   it('gives two stretches of the same curve that share the very same point', () => {
     fc.assert(
@@ -254,15 +290,19 @@ describe('splitting', () => {
 describe('monotone pieces', () => {
   it('never turn back', () => {
     fc.assert(
-      fc.property(anySegment(), fc.constantFrom<'x' | 'y'>('x', 'y'), (segment, axis) => {
-        const slack = 1e-10 * sizeOf([segment])
-        for (const piece of monotonePiecesOf(segment, axis)) {
-          const values = Array.from({ length: 33 }, (_, i) => pointAt(piece, i / 32)[axis])
-          const rises = values.every((value, i) => i === 0 || value >= (values[i - 1] ?? value) - slack)
-          const falls = values.every((value, i) => i === 0 || value <= (values[i - 1] ?? value) + slack)
-          expect(rises || falls).toBe(true)
-        }
-      }),
+      fc.property(
+        fc.oneof(anySegment(), anyEllipse()),
+        fc.constantFrom<'x' | 'y'>('x', 'y'),
+        (segment, axis) => {
+          const slack = 1e-10 * sizeOf([segment])
+          for (const piece of monotonePiecesOf(segment, axis)) {
+            const values = Array.from({ length: 33 }, (_, i) => pointAt(piece, i / 32)[axis])
+            const rises = values.every((value, i) => i === 0 || value >= (values[i - 1] ?? value) - slack)
+            const falls = values.every((value, i) => i === 0 || value <= (values[i - 1] ?? value) + slack)
+            expect(rises || falls).toBe(true)
+          }
+        },
+      ),
     )
   })
 

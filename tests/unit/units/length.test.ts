@@ -80,6 +80,13 @@ describe('parseLength', () => {
     expect(mmOf('0.1 + 0.2')).toBe(0.3)
   })
 
+  // 1 + 2⁻⁵³ lies midway between two doubles: the tie goes to the even one, 1; a hair more goes up
+  it('rounds a tie to even, and sees the least bit beyond it', () => {
+    const tie = '1.00000000000000011102230246251565404236316680908203125'
+    expect(mmOf(tie)).toBe(1)
+    expect(mmOf(`${tie}${'0'.repeat(40)}1`)).toBe(1 + Number.EPSILON)
+  })
+
   it.each([
     ['', /missing/],
     ['   ', /missing/],
@@ -104,6 +111,7 @@ describe('parseLength', () => {
     ['3.5 1/2', /whole number/],
     ['3.5½', /whole number/],
     ['3 17/16', /less than one/],
+    ['3 16/16', /less than one/],
     ['100-50/2', /less than one.*spaces/],
     ['5+3-1/4', /mixed number or a subtraction/],
     ['3 1.5/16', /two whole numbers/],
@@ -116,6 +124,7 @@ describe('parseLength', () => {
     ['3 / 4mm', /not a length/],
     ['7\' 14"', /fewer than twelve/],
     ["7' 2 mm", /only inches/],
+    [`7' 12"`, /fewer than twelve/],
     ['(3 mm) in', /two units/],
     ['mm', /number is missing/],
     ['84#', /“#” has no place/],
