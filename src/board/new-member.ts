@@ -1,6 +1,4 @@
-import type { Member, MemberKind } from '@shared/section'
-
-type Sized = Omit<Member, 'key'>
+import type { Free, Member, MemberKind } from '@shared/section'
 
 /** The fourteen kinds, in the order in which they are offered. */
 export const MEMBER_KINDS = [
@@ -55,7 +53,7 @@ export function newMemberOf(kind: MemberKind, size: number, sense: 1 | -1 = 1): 
 }
 
 /** One easy wave from end to end, level at both. */
-function freeMember(width: number, rise: number): Extract<Sized, { kind: 'free' }> {
+function freeMember(width: number, rise: number): Free {
   return {
     kind: 'free',
     width,
