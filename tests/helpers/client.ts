@@ -79,16 +79,14 @@ function heldAgainst(contract: Contract, response: Response, what: string): Resp
 }
 
 function routeOf(method: Method, path: string): Route | undefined {
-  const parts = (path.split('?')[0] ?? '').split('/')
-  return ROUTES.find((route) => {
-    const wanted = route.path.split('/')
-    return (
-      route.method === method &&
-      wanted.length === parts.length &&
-      wanted.every((part, index) => part.startsWith(':') || part === parts[index])
-    )
-  })
+  const asked = path.split('?')[0] ?? ''
+  const fitting = ROUTES.filter((route) => route.method === method && patternOf(route.path).test(asked))
+  // An address without a name in it is meant rather than one that would take it for a name.
+  return fitting.find((route) => route.path === asked) ?? fitting[0]
 }
+
+const patternOf = (path: string): RegExp =>
+  new RegExp(`^${path.replaceAll('.', String.raw`\.`).replaceAll(/:[a-z]+/gi, '[^/]+')}$`)
 
 /** Reads a body as bytes. The library types the response as already parsed; here it is still the stream. */
 const bytesParser = (response: Response, done: (error: Error | null, body: Buffer) => void): void =>

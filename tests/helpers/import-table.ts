@@ -100,7 +100,11 @@ const ROWS: readonly Row[] = [
   { of: /^examples\//, may: [anyShared], packages: [], node: true },
   {
     of: /^tests\/api\//,
-    may: [/^tests\/helpers\//, server('app', 'config', 'models', 'migrations', 'routes'), anyShared],
+    may: [
+      /^tests\/helpers\//,
+      server('app', 'config', 'models', 'migrations', 'routes', 'mail/worker', 'services/running-worker'),
+      anyShared,
+    ],
     packages: 'any',
     node: true,
   },
