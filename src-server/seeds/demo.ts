@@ -2,9 +2,11 @@ import { randomBytes } from 'node:crypto'
 import { rename, writeFile } from 'node:fs/promises'
 import { join } from 'node:path'
 import type { Actor } from '@shared/access'
-import type { RoleName } from '@shared/contracts'
 import { Person } from '../models/person'
+import { tellStories } from './commissions/all'
+import { onDay } from './days'
 import { enterDemoPeople } from './people'
+import type { DemoSignIn } from './people'
 import { enterDemoWorkshop } from './workshop'
 
 export interface DemoSurroundings {
@@ -12,21 +14,16 @@ export interface DemoSurroundings {
   readonly dataDir: string
 }
 
-/** A way into the demo, as the start prints it. */
-export interface DemoSignIn {
-  readonly role: RoleName
-  readonly name: string
-  readonly email: string
-  readonly password: string
-}
-
 /** Fills an empty database with a workshop of our own invention. Passwords are new for every installation. */
 export async function fillDemo({ dataDir }: DemoSurroundings): Promise<void> {
   if ((await Person.count()) > 0)
     throw new Error('The database holds people already; the demo was not filled in.')
-  const workshop = await enterDemoWorkshop(FOUNDER)
-  const signIns = await enterDemoPeople(FOUNDER, workshop, newPassword)
-  await noteSignIns(join(dataDir, 'demo-sign-ins.json'), signIns)
+  const { workshop, people } = await onDay(90, 9, async () => {
+    const entered = await enterDemoWorkshop(FOUNDER)
+    return { workshop: entered, people: await enterDemoPeople(FOUNDER, entered, newPassword) }
+  })
+  await tellStories({ ...workshop, people: people.actors })
+  await noteSignIns(join(dataDir, 'demo-sign-ins.json'), people.signIns)
 }
 
 /** Acts until there is a manager. */
