@@ -16,6 +16,9 @@ export function useDates() {
         year: 'numeric',
         timeZone: 'UTC',
       }),
+    /** The day of a moment, in the time of this place. */
+    printDayOf: (instant: string) =>
+      print(new Date(instant), { day: 'numeric', month: 'short', year: 'numeric' }),
     /** A moment, in the time of this place: 1 Dec 2026, 10:42 */
     printMoment: (instant: string) =>
       print(new Date(instant), {

@@ -1,33 +1,24 @@
+import type { Component } from 'vue'
 import type { RouteRecordRaw } from 'vue-router'
 import { COMMISSION_ROUTE } from './commission-routes'
 
+/** A page in the plain frame, for whoever comes: no account is needed. */
+const openRoute = (
+  path: string,
+  name: string,
+  title: string,
+  component: () => Promise<Component>,
+): RouteRecordRaw => ({
+  path,
+  component: () => import('@/layouts/PlainLayout.vue'),
+  children: [{ path: '', name, component, props: path.includes(':'), meta: { title, open: true } }],
+})
+
 const OPEN_ROUTES: RouteRecordRaw[] = [
-  {
-    path: 'sign-in',
-    name: 'sign-in',
-    component: () => import('@/pages/SignInPage.vue'),
-    meta: { title: 'Sign in', open: true },
-  },
-  {
-    path: 'welcome/:token',
-    name: 'welcome',
-    component: () => import('@/pages/WelcomePage.vue'),
-    props: true,
-    meta: { title: 'Welcome', open: true },
-  },
-  {
-    path: 'link/:token',
-    name: 'link',
-    component: () => import('@/pages/LinkPage.vue'),
-    props: true,
-    meta: { title: 'Knife order', open: true },
-  },
-  {
-    path: 'out-of-reach',
-    name: 'out-of-reach',
-    component: () => import('@/pages/OutOfReachPage.vue'),
-    meta: { title: 'Out of reach', open: true },
-  },
+  openRoute('/sign-in', 'sign-in', 'Sign in', () => import('@/pages/SignInPage.vue')),
+  openRoute('/welcome/:token', 'welcome', 'Welcome', () => import('@/pages/WelcomePage.vue')),
+  openRoute('/link/:token', 'link', 'Knife order', () => import('@/pages/LinkPage.vue')),
+  openRoute('/out-of-reach', 'out-of-reach', 'Out of reach', () => import('@/pages/OutOfReachPage.vue')),
 ]
 
 const WORKSHOP_ROUTES: RouteRecordRaw[] = [
@@ -127,7 +118,7 @@ const WORKSHOP_ROUTES: RouteRecordRaw[] = [
 ]
 
 export const ROUTES: RouteRecordRaw[] = [
-  { path: '/', component: () => import('@/layouts/PlainLayout.vue'), children: OPEN_ROUTES },
+  ...OPEN_ROUTES,
   COMMISSION_ROUTE,
   {
     path: '/cut-lists/:id',
