@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { beforeAll, describe, expect, it } from 'vitest'
-import { Client } from '@server/models/person'
+import { Client, Membership } from '@server/models/person'
 import { ROUTES } from '@server/routes'
 import { useApplication } from '../helpers/application'
 import { signedIn, stranger } from '../helpers/client'
@@ -11,7 +11,17 @@ import { aClient } from '../helpers/factories/people'
 const listel = useApplication()
 let manager: HttpClient
 beforeAll(async () => {
-  manager = await signedIn(listel.app, { role: 'manager' })
+  const person = await signedIn(listel.app, { role: 'manager' })
+  // A curator as well, so that every door is open and what was sent is looked at.
+  const { id: clientId } = await aClient()
+  await Membership.create({
+    personId: person.personId,
+    role: 'curator',
+    clientId,
+    millId: null,
+    createdAt: new Date(),
+  })
+  manager = person
 })
 
 /** Texts that have broken programs before. */
