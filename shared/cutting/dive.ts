@@ -1,6 +1,6 @@
-import { completedWithin } from './completion'
-import type { CompletionSearch, Rest } from './completion'
 import { greedyPlanOf } from './greedy'
+import { lightestWithin } from './lightest'
+import type { LightestSearch } from './lightest'
 import { weightOf } from './pattern'
 import type { Pattern } from './pattern'
 import { pricedOut } from './price-out'
@@ -8,8 +8,13 @@ import type { RelaxedPlan } from './price-out'
 import { withAllowance } from './step-counter'
 import type { StockModel } from './stock-model'
 
+interface Rest {
+  readonly demand: number[]
+  readonly available: number[]
+}
+
 export interface DiveRequest {
-  readonly search: CompletionSearch
+  readonly search: LightestSearch
   readonly costs: readonly number[]
   /** Relaxed plan of the whole. */
   readonly relaxed: RelaxedPlan
@@ -55,13 +60,14 @@ export function dive(request: DiveRequest): Pattern[] | undefined {
   return best
 }
 
-function searchedTail(search: CompletionSearch, rest: Rest, budget: number): readonly Pattern[] | undefined {
+function searchedTail(search: LightestSearch, rest: Rest, budget: number): readonly Pattern[] | undefined {
   const rails = rest.demand.reduce((sum, count) => sum + count, 0)
   if (rails > SEARCHED_RAILS) return undefined
-  return withAllowance(search.counter, STEPS_PER_SEARCH, (counter) => {
-    const completed = completedWithin({ ...search, counter }, rest, budget)
-    return completed.kind === 'found' ? completed.patterns : undefined
-  })
+  return withAllowance(
+    search.counter,
+    STEPS_PER_SEARCH,
+    (counter) => lightestWithin({ ...search, counter }, { ...rest, from: 0, to: budget }).patterns,
+  )
 }
 
 /** Takes the whole parts of the relaxed plan off the rest; where there are none, the pattern that is cut nearest to once. */

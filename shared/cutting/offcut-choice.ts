@@ -1,5 +1,5 @@
-import { completedWithin, leastWeightOf } from './completion'
-import type { CompletionSearch, Rest } from './completion'
+import { leastWeightOf, lightestWithin } from './lightest'
+import type { LightestRequest, LightestSearch } from './lightest'
 import { takenByPattern, weightOf } from './pattern'
 import type { Pattern } from './pattern'
 import { withAllowance } from './step-counter'
@@ -22,8 +22,8 @@ export function offcutOf(model: StockModel, { stock, counts }: Pattern): number 
  * carry, least first, and whether the rest can still be cut as cheaply.
  */
 export function withLongestOffcut(
-  search: CompletionSearch,
-  patterns: readonly Pattern[],
+  search: LightestSearch,
+  { patterns, isProven }: { readonly patterns: readonly Pattern[]; readonly isProven: boolean },
   smallestUsable: number,
 ): readonly Pattern[] {
   const { model } = search
@@ -36,16 +36,20 @@ export function withLongestOffcut(
       const rest = restBeside(model, candidate)
       const left = budget - model.stocks[candidate.stock]!.weight
       if (leastWeightOf(search, rest) > left) continue
-      const completed = withAllowance(whole, STEPS_PER_CANDIDATE, (counter) =>
-        completedWithin({ ...search, counter }, rest, left),
+      // Of a proven weight no part can be bettered: the rest weighs what is left exactly or cannot be cut for it.
+      const { patterns: others } = withAllowance(whole, STEPS_PER_CANDIDATE, (counter) =>
+        lightestWithin({ ...search, counter }, { ...rest, from: isProven ? left : 0, to: left }),
       )
-      if (completed.kind === 'found') return [candidate, ...completed.patterns]
+      if (others !== undefined) return [candidate, ...others]
     }
     return patterns
   })
 }
 
-function restBeside({ kinds, stocks }: StockModel, { stock, counts }: Pattern): Rest {
+function restBeside(
+  { kinds, stocks }: StockModel,
+  { stock, counts }: Pattern,
+): Pick<LightestRequest, 'demand' | 'available'> {
   return {
     demand: kinds.map(({ demand }, kind) => demand - counts[kind]!),
     available: stocks.map(({ limit, isUnlimited }, index) =>

@@ -50,7 +50,7 @@ function planFrom({ instance, model, solved, counter, unit }: PlanParts): CutPla
   const smallestUsable = nanometresUp(instance.saw.smallestUsableOffcut)
   const patterns =
     model.railCount <= OFFCUT_SOUGHT && model.countsPieces
-      ? withLongestOffcut(solved.search, solved.patterns, smallestUsable)
+      ? withLongestOffcut(solved.search, solved, smallestUsable)
       : solved.patterns
   const { toOrder, warnings } = toOrderOf({ instance, model, patterns, counter, unit })
   return {

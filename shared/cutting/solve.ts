@@ -1,16 +1,18 @@
-import { attainableTotalsOf, raisedToAttainable } from './attainable'
-import { completedWithin, leastWeightOf } from './completion'
-import type { CompletionSearch } from './completion'
+import { attainableTotalsOf } from './attainable'
 import { dive } from './dive'
 import { boundFrom, dualPricesFrom, materialPricesOf } from './dual-prices'
 import type { DualPrices } from './dual-prices'
 import { greedyPlanOf } from './greedy'
+import { leastWeightOf, lightestWithin } from './lightest'
+import type { LightestSearch } from './lightest'
 import { valueOf, weightOf } from './pattern'
 import type { Pattern } from './pattern'
 import { pricedOut } from './price-out'
 import type { RelaxedPlan } from './price-out'
 import type { StepCounter } from './step-counter'
 import type { StockModel } from './stock-model'
+import { worthsFrom } from './worths'
+import type { Worths } from './worths'
 
 export type Solved =
   | {
@@ -19,7 +21,7 @@ export type Solved =
       readonly isProven: boolean
       /** Lower bound of the first objective, in the model's units of value. */
       readonly valueBound: number
-      readonly search: CompletionSearch
+      readonly search: LightestSearch
     }
   /** Proved that no plan exists, or, not proved, none was found. */
   | { readonly kind: 'unsolved'; readonly isProven: boolean }
@@ -28,8 +30,6 @@ export type Solved =
 const SEARCHED_THROUGH = 24
 /** Kinds and scarce stocks in all up to which the relaxed plan is worked out. */
 const RELAXED_ROWS = 250
-/** Totals between bound and best plan that are tried one by one; more, and the best plan is bettered step by step. */
-const TOTALS_TRIED = 40
 
 /** The best plan that the steps allow for a model with at least one rail, and what is proved of it. */
 export function solve(model: StockModel, counter: StepCounter): Solved {
@@ -39,11 +39,14 @@ export function solve(model: StockModel, counter: StepCounter): Solved {
   const greedy = greedyPlanOf(model, demand, available)
   const relaxed = relaxedOf(model, weights, counter)
   const most = greedy === undefined ? heaviestOf(model) : weightOf(model, greedy)
-  const search: CompletionSearch = {
+  const search: LightestSearch = {
     model,
     duals: dualsOf(model, weights, relaxed),
+    worths: [materialPricesOf(model, weights), relaxed?.prices ?? []].flatMap((prices) =>
+      worthsOf(model, prices),
+    ),
     attainable: attainableTotalsOf(weights, most),
-    proved: new Map(),
+    refuted: new Set(),
     counter,
   }
   const bound = leastWeightOf(search, { demand, available })
@@ -52,8 +55,10 @@ export function solve(model: StockModel, counter: StepCounter): Solved {
   if (isOpen() && model.railCount > SEARCHED_THROUGH && relaxed !== undefined) {
     best = lighter(model, best, dive({ search, costs: weights, relaxed, demand, available, target: bound }))
   }
-  const searched = isOpen() ? searchedThrough(search, best, bound, most) : { best, provedBound: bound }
-  return solvedFrom(search, searched)
+  if (!isOpen()) return solvedFrom(search, { best, provedBound: bound })
+  const to = best === undefined ? most : weightOf(model, best) - 1
+  const { patterns, provedBound } = lightestWithin(search, { demand, available, from: bound, to })
+  return solvedFrom(search, { best: patterns ?? best, provedBound })
 }
 
 interface Searched {
@@ -62,43 +67,7 @@ interface Searched {
   readonly provedBound: number
 }
 
-/** Tries the totals from the bound up, or the best plan's next below, until nothing lies between bound and best plan. */
-function searchedThrough(
-  search: CompletionSearch,
-  known: readonly Pattern[] | undefined,
-  bound: number,
-  most: number,
-): Searched {
-  const { model, attainable } = search
-  const rest = () => ({
-    demand: model.kinds.map(({ demand }) => demand),
-    available: model.stocks.map(({ limit }) => limit),
-  })
-  let best = known
-  let provedBound = bound
-  const above = known === undefined ? most + 1 : weightOf(model, known)
-  const between = attainable?.totals.filter((total) => total >= bound && total < above) ?? []
-  if (attainable !== undefined && between.length <= TOTALS_TRIED) {
-    for (const total of between) {
-      const completed = completedWithin(search, rest(), total)
-      if (completed.kind === 'found') return { best: completed.patterns, provedBound: total }
-      if (completed.kind === 'ended') return { best, provedBound }
-      provedBound = raisedToAttainable(attainable, total + 1)
-    }
-    return { best, provedBound: above }
-  }
-  while (best === undefined || weightOf(model, best) > provedBound) {
-    const budget = best === undefined ? most : weightOf(model, best) - 1
-    const completed = completedWithin(search, rest(), budget)
-    if (completed.kind === 'ended') break
-    if (completed.kind === 'none') provedBound = budget + 1
-    if (completed.kind === 'none' && best === undefined) break
-    if (completed.kind === 'found') best = completed.patterns
-  }
-  return { best, provedBound }
-}
-
-function solvedFrom(search: CompletionSearch, { best, provedBound }: Searched): Solved {
+function solvedFrom(search: LightestSearch, { best, provedBound }: Searched): Solved {
   const { model, counter } = search
   if (best === undefined) return { kind: 'unsolved', isProven: !counter.hasEnded }
   const value = valueOf(model, best)
@@ -160,6 +129,11 @@ const dualsOf = (
   [materialPricesOf(model, costs), ...(relaxed === undefined ? [] : [relaxed.prices])].map((prices) =>
     dualPricesFrom(model, costs, prices),
   )
+
+function worthsOf(model: StockModel, prices: readonly number[]): Worths[] {
+  const worths = prices.length === 0 ? undefined : worthsFrom(model, prices)
+  return worths === undefined ? [] : [worths]
+}
 
 /** As heavy as any plan can be that opens no more pieces than there are rails. */
 const heaviestOf = ({ stocks, railCount }: StockModel): number =>
