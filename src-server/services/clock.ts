@@ -5,6 +5,9 @@ const begun = new AsyncLocalStorage<{ readonly aheadMs: number }>()
 /** The time, to the millisecond as the database keeps it. The one place of the server that asks the clock. */
 export const now = (): Date => new Date(Date.now() + (begun.getStore()?.aheadMs ?? 0))
 
+/** The time on the wall, also within work that began at another. */
+export const wallTime = (): Date => new Date()
+
 /** Today in UTC, as 2026-12-01. */
 export const today = (): string => now().toISOString().slice(0, 10)
 

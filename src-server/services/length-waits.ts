@@ -1,3 +1,5 @@
+import { Op } from 'sequelize'
+import { KnifeOrder } from '../models/order'
 import { listCutLists } from './cut-lists'
 import { briefOf, hasRole, openCommissions } from './waiting'
 import type { WaitingItem, WaitingSource } from './waiting'
@@ -25,7 +27,11 @@ export const planWaits: WaitingSource = async (actor) => {
     ({ standing }) =>
       standing.role === 'designer' && (standing.stage === 'lengths' || standing.stage === 'knife'),
   )
-  return ready.map(({ commission, standing, isStuck }) => ({
+  const told = await withOrderUnderWay(ready.map(({ commission }) => commission.id))
+  const untold = ready.filter(
+    ({ commission, standing }) => standing.stage !== 'knife' || !told.has(commission.id),
+  )
+  return untold.map(({ commission, standing, isStuck }) => ({
     kind: standing.stage === 'lengths' ? 'plan' : 'order',
     says: standing.waitsFor,
     commission: briefOf(commission),
@@ -33,4 +39,13 @@ export const planWaits: WaitingSource = async (actor) => {
     since: commission.createdAt,
     urgent: isStuck,
   }))
+}
+
+/** Commissions with an order that was not cancelled: what it waits for, the orders tell by themselves. */
+async function withOrderUnderWay(commissionIds: readonly string[]): Promise<ReadonlySet<string>> {
+  const orders = await KnifeOrder.findAll({
+    where: { commissionId: { [Op.in]: [...commissionIds] }, state: { [Op.ne]: 'cancelled' } },
+    attributes: ['commissionId'],
+  })
+  return new Set(orders.map(({ commissionId }) => commissionId))
 }

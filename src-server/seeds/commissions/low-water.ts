@@ -3,7 +3,7 @@ import { readCutList } from '../../services/cut-lists'
 import { makeCutList } from '../../services/plan-cuts'
 import { addToRack } from '../../services/rack'
 import { openCutList, recordCut } from '../../services/record-cut'
-import { dayFromNow, onDay } from '../days'
+import { dayFromNow, onDay, timeOn } from '../days'
 import { addMeasuredPicture, drawSection, measurementOf, takeOn } from '../drawing-acts'
 import { orderFor, orderFrom, step } from '../order-acts'
 import { LIME } from '../reasons'
@@ -130,11 +130,8 @@ async function cutHalf({ people }: Story, commissionId: string, issueId: string)
         cutId: cut.id,
         lengthNo: null,
         trueLength: Math.round((cut.lengthMm + offBy) * 10) / 10,
-        deviceTime: dayTime(1, 9 + index / 6),
+        deviceTime: timeOn(1, 9 + index / 6).toISOString(),
       }),
     )
   }
 }
-
-const dayTime = (daysAgo: number, hour: number): string =>
-  new Date(Date.parse(`${dayFromNow(-daysAgo)}T00:00:00.000Z`) + hour * 3_600_000).toISOString()
