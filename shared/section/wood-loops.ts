@@ -3,9 +3,9 @@ import {
   cross,
   distance,
   dot,
+  endTangentOf,
   intersectionsOf,
-  magnitudeOf,
-  minus,
+  startTangentOf,
   subSegment,
 } from '@shared/geometry'
 import type { Bounds, Segment } from '@shared/geometry'
@@ -64,7 +64,7 @@ function jumpFrom(
   let best: (Jump & { readonly length: number }) | undefined
   for (let other = index + 1; other < chain.length; other += 1) {
     if (isApart(box, boxes[other] as Bounds)) continue
-    if (other === index + 1 && isPlainCorner(segment, (chain[other] as FacePiece).segment)) continue
+    if (other === index + 1 && meetsAtJointAlone(segment, (chain[other] as FacePiece).segment)) continue
     for (const { tA, tB, point } of intersectionsOf(segment, (chain[other] as FacePiece).segment)) {
       const isJoint = other === index + 1 && tA === 1 && tB === 0
       if (isJoint || tA < t || distance(point, subStart(chain, { index, t })) <= POINT_MM) continue
@@ -77,16 +77,25 @@ function jumpFrom(
   return best
 }
 
-/** Two lines that follow one another meet again only where the second runs back along the first. */
-function isPlainCorner(a: Segment, b: Segment): boolean {
-  if (a.kind !== 'line' || b.kind !== 'line') return false
-  const u = minus(a.end, a.start)
-  const v = minus(b.end, b.start)
-  return dot(u, v) >= 0 || Math.abs(cross(u, v)) > STRAIGHT_BACK * magnitudeOf(u) * magnitudeOf(v)
+/**
+ * Neighbours that meet nowhere but at their joint, so that there is nothing to look for: lines that do not run straight back on one another, and
+ * lines and arcs that run smoothly on (tangent circles have one point in common).
+ */
+function meetsAtJointAlone(a: Segment, b: Segment): boolean {
+  if (!isLineOrArc(a) || !isLineOrArc(b)) return false
+  const before = endTangentOf(a)
+  const after = startTangentOf(b)
+  const sine = Math.abs(cross(before, after))
+  const isAhead = dot(before, after) > 0
+  if (a.kind === 'line' && b.kind === 'line') return isAhead || sine > STRAIGHT_SINE
+  return isAhead && sine <= SMOOTH_SINE
 }
 
-/** Sine of the angle below which one line runs straight back along another. */
-const STRAIGHT_BACK = 1e-6
+const isLineOrArc = ({ kind }: Segment): boolean => kind === 'line' || kind === 'arc'
+
+/** Sines of the angles below which one line runs straight back along another, and a joint is smooth. */
+const STRAIGHT_SINE = 1e-6
+const SMOOTH_SINE = 1e-9
 
 /** Parameters of a segment that differ by less are one place. */
 const nearness = (segment: Segment): number =>
