@@ -27,6 +27,9 @@ export function woodParts(scope: paper.PaperScope, palette: Palette) {
     const wood = drawn.woodFace ?? face
     const outline = pathDataOf([...wood, ...back], view)
     const isGessoed = drawn.woodFace !== undefined
+    // Before the first member there is no wood, only where it will begin.
+    tint.visible = drawn.members.length > 0
+    hatched.visible = tint.visible
     gesso.visible = isGessoed
     if (isGessoed) gesso.pathData = `${pathDataOf([...face, ...back], view)}Z`
     tint.pathData = `${outline}Z`
@@ -54,7 +57,7 @@ export function woodParts(scope: paper.PaperScope, palette: Palette) {
 
   return {
     paint,
-    contains: ({ x, y }: Point): boolean => tint.contains(new scope.Point(x, y)),
+    contains: ({ x, y }: Point): boolean => tint.visible && tint.contains(new scope.Point(x, y)),
   }
 }
 
@@ -90,6 +93,6 @@ function sidesOf({ draft, breaks }: DrawnSection): Path {
         { x: 0, y: rebate.depth },
       ]
     : [{ x: 0, y: 0 }]
-  const corners = [top, ...back, ...rebated, first]
+  const corners = top === first ? [...rebated.slice(-1), first] : [top, ...back, ...rebated, first]
   return corners.slice(1).map((end, index) => lineFrom(corners[index] as Point, end))
 }

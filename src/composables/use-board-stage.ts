@@ -22,6 +22,9 @@ export interface StageGiven {
 
 /** Room round the whole section: for the picture's names on the left, the dimension above and the wall below, CSS pixels. */
 const MARGINS = { left: 96, right: 56, top: 104, bottom: 46 }
+/** How near to the canvas's edge the drawing may come, CSS pixels, and how small against its best scale, before it is shown whole anew. */
+const TIGHT = 30
+const LEAST_SHARE = 0.6
 const STACK_NAMES = {
   glazing: 'glazing',
   airGap: 'air',
@@ -78,7 +81,8 @@ export function useBoardStage(
     const box = entry?.contentRect
     if (box !== undefined) size.value = { width: Math.round(box.width), height: Math.round(box.height) }
   })
-  watch([size, extent], () => isWhole.value && fit())
+  watch(size, () => isWhole.value && fit())
+  watch(extent, () => isWhole.value && desk.draft.preview === undefined && !stillSits() && fit())
   watch([model, view, size], askForPaint)
   onScopeDispose(() => {
     if (frame !== undefined) cancelAnimationFrame(frame)
@@ -94,11 +98,19 @@ export function useBoardStage(
     scene ??= sceneOn(canvas.value, paletteOf(canvas.value))
     scene.paint(model.value, view.value, size.value)
   }
+  function fitted(): View {
+    const margins = size.value.width < 560 ? { ...MARGINS, left: 64, right: 28 } : MARGINS
+    return fittedTo(extent.value, size.value, margins)
+  }
   function fit(): void {
-    if (size.value.width === 0) return
-    const { width, height } = size.value
-    const margins = width < 560 ? { ...MARGINS, left: 64, right: 28 } : MARGINS
-    view.value = fittedTo(extent.value, { width, height }, margins)
+    if (size.value.width > 0) view.value = fitted()
+  }
+  /** A drawing that still lies well on the canvas is left where it is, so that it does not jump at every stroke. */
+  function stillSits(): boolean {
+    const { min, max } = extent.value
+    const [lowest, highest] = [toCanvas(view.value, min), toCanvas(view.value, max)]
+    const isInside = highest.y >= TIGHT && highest.x <= size.value.width - TIGHT && lowest.x >= TIGHT
+    return isInside && view.value.pixelsPerMm > fitted().pixelsPerMm * LEAST_SHARE
   }
   function showWhole(): void {
     isWhole.value = true

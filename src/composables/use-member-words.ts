@@ -19,8 +19,8 @@ const NAMES = {
 } as const satisfies Record<MemberKind, string>
 
 const SHORT_NAMES: Partial<Record<MemberKind, string>> = {
-  'cyma-recta': 'c. recta',
-  'cyma-reversa': 'c. reversa',
+  'cyma-recta': 'recta',
+  'cyma-reversa': 'reversa',
   free: 'free',
 }
 
