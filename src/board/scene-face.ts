@@ -12,6 +12,7 @@ import type { View } from './view-transform'
 /** CSS pixels. */
 const DIAMOND = 4.6
 const SELECTED_WIDTH = 5
+const SELECTED_DASH = [8, 4]
 const MARK_WIDTH = 7
 
 /** A member's line, and what it was last made from. */
@@ -27,6 +28,12 @@ interface FaceItem {
 export function faceParts(scope: paper.PaperScope, palette: Palette) {
   const lines = new scope.Group()
   const items = new Map<string, FaceItem>()
+  const drops = new scope.CompoundPath({
+    strokeColor: palette.ink2,
+    strokeWidth: 0.7,
+    dashArray: [1, 3],
+    opacity: 0.55,
+  })
   const diamonds = new scope.CompoundPath({
     fillColor: palette.gesso,
     strokeColor: palette.ink,
@@ -88,7 +95,7 @@ export function faceParts(scope: paper.PaperScope, palette: Palette) {
     item.line.pathData = data
     item.line.strokeColor = new scope.Color(isSelected ? palette.bole : look.color)
     item.line.strokeWidth = isSelected ? SELECTED_WIDTH : look.width
-    item.line.dashArray = look.dash
+    item.line.dashArray = isSelected && look.dash.length > 0 ? SELECTED_DASH : look.dash
     item.marks.visible = basis === 'precedent' && !isBroken
     if (item.marks.visible) item.marks.pathData = data
     if (isSelected) lines.addChildren([item.line, item.marks])
@@ -96,6 +103,9 @@ export function faceParts(scope: paper.PaperScope, palette: Palette) {
 
   function paintBreaks({ drawn, selectedBreak }: SceneModel, view: View): void {
     const places = drawn.breaks.map((place) => toCanvas(view, place))
+    const foot = scope.view.viewSize.height
+    // From each break down to the member rule, which is divided at the same places.
+    drops.pathData = places.map(({ x, y }) => `M${Math.round(x) + 0.5} ${y}V${foot}`).join('')
     diamonds.pathData = places.map((place) => diamondAt(place, DIAMOND)).join('')
     const at = places.find((_, number) => breakKeyOf(drawn.draft, number) === selectedBreak)
     chosen.visible = at !== undefined

@@ -1,5 +1,4 @@
-import { toCanvas } from './view-transform'
-import { gridOf } from './view-transform'
+import { gridOf, toCanvas } from './view-transform'
 import type { Palette } from './scene-palette'
 import type { SceneModel } from './scene'
 import type { CanvasSize, View } from './view-transform'
@@ -7,6 +6,9 @@ import type { CanvasSize, View } from './view-transform'
 /** CSS pixels. */
 const WALL_BAND = 7
 const LABEL_INSET = 12
+/** A box lower than this, or with less room beside the wood, goes without its name. */
+const LEAST_NAMED = 11
+const NAME_WIDTH = 46
 
 /** What the section stands on: grid, wall, and the picture's stack. */
 export function groundParts(scope: paper.PaperScope, palette: Palette) {
@@ -68,7 +70,7 @@ export function groundParts(scope: paper.PaperScope, palette: Palette) {
         outline.dashArray = [5, 3]
         boxes.addChild(outline)
       }
-      if (to.y - from.y < 11) continue
+      if (to.y - from.y < LEAST_NAMED || from.x < LABEL_INSET + NAME_WIDTH) continue
       const name = label(scope, palette.slate)
       name.content = names[part]
       name.point = new scope.Point(LABEL_INSET, (from.y + to.y) / 2 + 4)

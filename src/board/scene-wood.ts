@@ -10,10 +10,14 @@ import type { View } from './view-transform'
 /** Between two lines of the hatch, CSS pixels, measured along x. */
 const HATCH = 11
 
+/** How solid the wood and the gesso are drawn: less over a photograph, which is to be seen through them. */
+const SOLID = { tint: 0.86, gesso: 0.9 }
+const SEEN_THROUGH = { tint: 0.3, gesso: 0.3 }
+
 /** The wood: its tint, the hatch (one path behind one mask), the sides that are not the face, and the wood face under gesso. */
 export function woodParts(scope: paper.PaperScope, palette: Palette) {
-  const gesso = new scope.Path({ fillColor: palette.gesso, opacity: 0.9 })
-  const tint = new scope.Path({ fillColor: palette.boleTint, opacity: 0.86 })
+  const gesso = new scope.Path({ fillColor: palette.gesso })
+  const tint = new scope.Path({ fillColor: palette.boleTint })
   const mask = new scope.Path({ clipMask: true })
   const hatch = new scope.Path({ strokeColor: palette.bole, strokeWidth: 0.7, opacity: 0.32 })
   const hatched = new scope.Group([mask, hatch])
@@ -21,7 +25,10 @@ export function woodParts(scope: paper.PaperScope, palette: Palette) {
   const sides = new scope.Path({ strokeColor: palette.ink, strokeWidth: 1.6, strokeJoin: 'miter' })
   const woodFace = new scope.Path({ strokeColor: palette.ink2, strokeWidth: 1 })
 
-  function paint({ drawn }: SceneModel, view: View): void {
+  function paint({ drawn, photograph }: SceneModel, view: View): void {
+    const solid = photograph === undefined ? SOLID : SEEN_THROUGH
+    tint.opacity = solid.tint
+    gesso.opacity = solid.gesso
     const face = drawn.members.flatMap(({ path }) => path)
     const back = sidesOf(drawn)
     const wood = drawn.woodFace ?? face

@@ -53,7 +53,7 @@ export function sceneOn(canvas: HTMLCanvasElement, palette: Palette): Scene {
   const scope = new paperCore.PaperScope()
   scope.setup(canvas)
   scope.view.autoUpdate = false
-  const photograph = photographPart(scope, () => scope.view.update())
+  const photograph = photographPart(scope, () => void scope.view.update())
   const ground = groundParts(scope, palette)
   const wood = woodParts(scope, palette)
   const face = faceParts(scope, palette)

@@ -103,6 +103,24 @@ export function useSectionActs(desk: BoardDesk) {
       return Object.keys(after).length === 0 ? member : { ...member, basis: after }
     })
   }
+  /** Gives one basis to every dimension that has none yet. */
+  function spreadBasis(basis: Basis): void {
+    const document = draft.document
+    if (document === undefined) return
+    const edits = document.members.flatMap((member): SectionEdit[] => {
+      const { width, rise } = member.basis ?? {}
+      const isWhole = (member.width === 0 || width !== undefined) && (member.rise === 0 || rise !== undefined)
+      if (isWhole) return []
+      const given = {
+        ...(member.width === 0 ? {} : { width: width ?? basis }),
+        ...(member.rise === 0 ? {} : { rise: rise ?? basis }),
+      }
+      return [{ act: 'change', key: member.key, member: { ...member, basis: given } }]
+    })
+    if (document.basis?.sightEdgeHeight === undefined)
+      edits.push({ act: 'set', field: 'basis', value: { sightEdgeHeight: basis } })
+    if (edits.length > 0) take(`All without a basis: ${basis.kind}`, { act: 'together', edits })
+  }
   function setSightEdgeBasis(basis: Basis | undefined): void {
     set('Basis of the sight edge’s height', {
       act: 'set',
@@ -138,6 +156,7 @@ export function useSectionActs(desk: BoardDesk) {
     change,
     changeKind,
     setBasis,
+    spreadBasis,
     setSightEdgeBasis,
     set,
     nudgeBreak,
