@@ -1,9 +1,8 @@
 import { boundsOf, extremaOf, type Bounds } from './bounds'
-import { endTangentOf, startTangentOf } from './evaluate'
 import { intersectionsOf, type Meeting } from './intersect'
-import { dot, isSamePoint } from './point'
+import { isSamePoint } from './point'
 import { subSegment } from './split'
-import type { Path, Point, Segment } from './segment'
+import type { Path, Segment } from './segment'
 
 /** A place where two segments of paths meet; segments are named by their index. */
 export interface PathMeeting extends Meeting {
@@ -114,16 +113,6 @@ function crossingsOf(a: Piece, b: Piece): readonly PathMeeting[] {
     }))
 }
 
-/** mm; on smooth joints, curves of nearly one curvature linger within rounding of each other about this far. */
-const LINGER_MM = 0.05
-
-/** Whether a meeting is where `first` ends and `second` starts; past a smooth joint, also what lingers beside it. */
-function isAtJoint(first: Piece, second: Piece, { tA, tB, point }: Meeting): boolean {
-  const joint = first.curve.end
-  if (!isSamePoint(joint, second.curve.start)) return false
-  if (tA === 1 && tB === 0) return true
-  const isSmooth = dot(endTangentOf(first.curve), startTangentOf(second.curve)) > 0
-  return isSmooth && tA > 0.5 && tB < 0.5 && isNear(point, joint)
-}
-
-const isNear = (a: Point, b: Point): boolean => Math.hypot(a.x - b.x, a.y - b.y) <= LINGER_MM
+/** Whether a meeting is where `first` ends and `second` starts. */
+const isAtJoint = (first: Piece, second: Piece, { tA, tB }: Meeting): boolean =>
+  tA === 1 && tB === 0 && isSamePoint(first.curve.end, second.curve.start)

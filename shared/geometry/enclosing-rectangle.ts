@@ -129,12 +129,7 @@ export function smallestEnclosingRectangleOf(path: Path): EnclosingRectangle {
       const place = angles.indexOf(angle)
       const before = angles[place - 1] ?? angle - 0.05
       const after = angles[place + 1] ?? angle + 0.05
-      return [
-        angle,
-        narrowed(path, before, angle),
-        narrowed(path, angle, after),
-        narrowed(path, before, after),
-      ]
+      return [angle, narrowed(outer, before, angle), narrowed(outer, angle, after)]
     })
     .map((angle) => enclosingRectangleAt(path, angle))
     .reduce(better, upright)

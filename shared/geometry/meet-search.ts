@@ -70,8 +70,20 @@ function isApart(p: Stretch, q: Stretch, reachMm: number): boolean {
     Math.min(p.start.x, p.end.x) > Math.max(q.start.x, q.end.x) + reach ||
     Math.min(q.start.x, q.end.x) > Math.max(p.start.x, p.end.x) + reach ||
     Math.min(p.start.y, p.end.y) > Math.max(q.start.y, q.end.y) + reach ||
-    Math.min(q.start.y, q.end.y) > Math.max(p.start.y, p.end.y) + reach
+    Math.min(q.start.y, q.end.y) > Math.max(p.start.y, p.end.y) + reach ||
+    isBeside(p, q, reach) ||
+    isBeside(q, p, reach)
   )
+}
+
+/** Whether q lies wholly to one side of p's chord: what boxes do not see of slanted stretches that run alike. */
+function isBeside(p: Stretch, q: Stretch, reach: number): boolean {
+  const ux = p.end.x - p.start.x
+  const uy = p.end.y - p.start.y
+  const size = Math.hypot(ux, uy) * reach
+  const first = ux * (q.start.y - p.start.y) - uy * (q.start.x - p.start.x)
+  const second = ux * (q.end.y - p.start.y) - uy * (q.end.x - p.start.x)
+  return (first > size && second > size) || (first < -size && second < -size)
 }
 
 function isSettled(p: Stretch, q: Stretch, isSpent: boolean): boolean {

@@ -5,6 +5,7 @@ import {
   arcFromCentre,
   arcFromSweep,
   cubicFrom,
+  curvatureAt,
   ellipseFrom,
   intersectionsOf,
   lineFrom,
@@ -16,10 +17,11 @@ import {
   selfCrossingsOf,
   splitAt,
   subSegment,
+  tangentAt,
   type Point,
   type Segment,
 } from '@shared/geometry'
-import { anyPlainCubic, anyPoint, anySegment, sizeOf } from '../../helpers/arbitraries-geometry'
+import { anyEllipse, anyPlainCubic, anyPoint, anySegment, sizeOf } from '../../helpers/arbitraries-geometry'
 import { expectWithin } from '../../helpers/expect-within'
 
 const placesOf = (a: Segment, b: Segment): readonly Point[] =>
@@ -111,6 +113,25 @@ describe('intersectionsOf', () => {
     }
   })
 
+  it('a line just inside a tangent meets the curve on both sides of it', () => {
+    const depth = fc.constantFrom(1e-4, 1e-5, 1e-7)
+    fc.assert(
+      fc.property(anyEllipse(), fc.double({ min: 0.2, max: 0.8, noNaN: true }), depth, (ellipse, t, deep) => {
+        const curvature = curvatureAt(ellipse, t)
+        if (Math.abs(curvature) < 0.005 || Math.abs(curvature) > 0.2) return
+        const { x, y } = pointAt(ellipse, t)
+        const along = tangentAt(ellipse, t)
+        const inward = deep * Math.sign(curvature)
+        // far enough to leave the curve by twice the depth on either side, were it a circle
+        const reach = 2 * Math.sqrt((2 * deep) / Math.abs(curvature))
+        const onLine = (s: number): Point =>
+          at(x + along.x * s - along.y * inward, y + along.y * s + along.x * inward)
+        expect(intersectionsOf(ellipse, lineFrom(onLine(-reach), onLine(reach))).length).toBe(2)
+      }),
+      { numRuns: 300 },
+    )
+  })
+
   it('an ellipse with a circle of its short axis touches at its two ends', () => {
     const ellipse = ellipseFrom({ centre: at(0, 0), semiX: 8, semiY: 5, startRad: 0.1, sweepRad: 6 })
     expectPlaces(ellipse, CIRCLE, [at(0, -5), at(0, 5)])
@@ -197,6 +218,11 @@ describe('selfCrossingsOf', () => {
     expect(selfCrossingsOf(cyma)).toEqual([])
     const same = [arcFromCentre(at(0, 0), 5, 0, 1), arcFromCentre(at(0, 0), 5, 1, 1)] as const
     expect(selfCrossingsOf([same[0], { ...same[1], start: same[0].end }])).toEqual([])
+    for (const sliver of [1e-3, 1e-6, 1e-9]) {
+      const first = arcFromCentre(at(0, 0), 10, 0, 1)
+      const second = arcFromCentre(at(-sliver * Math.cos(1), -sliver * Math.sin(1)), 10 + sliver, 1, 1)
+      expect(selfCrossingsOf([first, { ...second, start: first.end }])).toEqual([])
+    }
   })
 
   it('passes smooth cuts of one curve over', () => {
@@ -265,6 +291,12 @@ describe('nearestOnPath', () => {
     expectWithin(nearestOnPath(ellipse, at(8, 0)).distance, 2, { withinMm: 1e-10 })
     // at x = 3 on the axis: foot at cos t = a x/(a² − b²) = 0.4, distance² = b² (1 − x²/(a² − b²)) = 25 (1 − 9/75)
     expectWithin(nearestOnPath(ellipse, at(3, 0)).distance, Math.sqrt(22), { withinMm: 1e-10 })
+  })
+
+  // symmetric about x = 5/2, its top at y = 9/4 for t = 1/2: there a quarter of a millimetre off, farther on both sides
+  it('on a cubic just at the middle of it', () => {
+    const bow = cubicFrom(at(0, 0), at(1, 3), at(4, 3), at(5, 0))
+    expect(nearestOnPath([bow], at(2.5, 2))).toMatchObject({ t: 0.5, distance: 0.25 })
   })
 
   it('is never beaten by sampling, and reached by it', () => {
