@@ -1,4 +1,4 @@
-import { CutListAnswer, CutListLine, RailsAnswer } from '@shared/contracts'
+import { CutListAnswer, CutListsAnswer, RailsAnswer } from '@shared/contracts'
 import type { CutFactRequest, OpenCutListRequest, OutputOf, PlanRequest } from '@shared/contracts'
 import { addressOf, ask, send } from './request'
 
@@ -6,7 +6,7 @@ export const readRails = (commissionId: string, signal?: AbortSignal) =>
   ask(RailsAnswer, ['commissions', commissionId, 'rails'], { signal })
 export const makeCutList = (commissionId: string, body: OutputOf<typeof PlanRequest>) =>
   send(CutListAnswer, 'POST', ['commissions', commissionId, 'plans'], { body })
-export const readCutLists = (signal?: AbortSignal) => ask(CutListLine.array(), ['cut-lists'], { signal })
+export const readCutLists = (signal?: AbortSignal) => ask(CutListsAnswer, ['cut-lists'], { signal })
 export const readCutList = (id: string, signal?: AbortSignal) =>
   ask(CutListAnswer, ['cut-lists', id], { signal })
 export const openCutList = (id: string, body: OutputOf<typeof OpenCutListRequest>) =>

@@ -1,9 +1,9 @@
-import { RackPieceAnswer } from '@shared/contracts'
+import { Done, RackAnswer } from '@shared/contracts'
 import type { OutputOf, RackMovementRequest, RackPieceRequest } from '@shared/contracts'
 import { ask, send } from './request'
 
-export const readRack = (signal?: AbortSignal) => ask(RackPieceAnswer.array(), ['rack'], { signal })
+export const readRack = (signal?: AbortSignal) => ask(RackAnswer, ['rack'], { signal })
 export const addRackPieces = (body: OutputOf<typeof RackPieceRequest>) =>
-  send(RackPieceAnswer.array(), 'POST', ['rack'], { body })
+  send(Done, 'POST', ['rack'], { body })
 export const moveRackPiece = (body: OutputOf<typeof RackMovementRequest>) =>
-  send(RackPieceAnswer, 'POST', ['rack', 'movements'], { body })
+  send(Done, 'POST', ['rack', 'movements'], { body })

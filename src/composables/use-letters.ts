@@ -18,6 +18,6 @@ export const useLetter = (id: MaybeRefOrGetter<string>) =>
     { everyMs: LOOK_AGAIN_MS },
   )
 export const useSendLetterAgain = (id: MaybeRefOrGetter<string>) =>
-  useAct((_: 'again', operationId) => sendLetterAgain(toValue(id), operationId), {
+  useAct((_: 'again') => sendLetterAgain(toValue(id)), {
     changes: () => [KEYS.letters, KEYS.waiting],
   })
