@@ -43,7 +43,7 @@ export async function tellOfPebbles(story: Story): Promise<void> {
     curator: 'piers',
     days: { taken: 49, measured: 46, drawn: 43, putForward: 39, approved: 35 },
     note: 'Bare wood: what the camera saw is what the knife cuts.',
-    statement: 'The low light leaves no doubt about the steps. Approved.',
+    statement: 'The low light shows every step. Approved.',
   })
   const walnut = requireSpecies('black-walnut').name
   const lengths = [{ length: 3000, count: 2 }]

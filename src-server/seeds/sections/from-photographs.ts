@@ -3,14 +3,19 @@ import { because, drawer, judged, seen } from '../reasons'
 
 const SQUARE_BACK = { x: 0, height: 0 }
 
-/** Seen from the right: the inner mouldings are read, the outer hollow is next. */
-export const UPLAND_MEMBERS: readonly Member[] = [
+/** Seen from the right: widths are read as far as the outer round; the back is still to be settled. */
+const UPLAND_MEMBERS: readonly Member[] = [
   { kind: 'fillet', width: 5, rise: 0, ...because(seen(0.3)) },
-  { kind: 'cyma-reversa', width: 18, rise: 10, ...because(seen(0.4), seen(0.9)) },
+  { kind: 'cyma-reversa', width: 18, rise: 10, ...because(seen(0.4), drawer(19)) },
   { kind: 'fillet', width: 0, rise: -2, basis: { rise: judged('the shadow line beside the bead') } },
   { kind: 'bead', width: 8, rise: 0, ...because(seen(0.4)) },
   { kind: 'fillet', width: 4, rise: 0, ...because(seen(0.4)) },
-  { kind: 'cavetto', width: 30, rise: 26, ...because(seen(0.5), seen(1.2)) },
+  {
+    kind: 'cavetto',
+    width: 31,
+    rise: 26,
+    ...because(seen(0.5), judged('from the depth of its shadow on the left rail')),
+  },
   { kind: 'fillet', width: 5, rise: 0, ...because(seen(0.4)) },
   { kind: 'ovolo', width: 22, rise: -3, arc: 76, ...because(seen(0.5)) },
   { kind: 'cyma-recta', width: 16, rise: -27 },
@@ -22,7 +27,7 @@ export const UPLAND: Section = {
   backSplay: SQUARE_BACK,
   gesso: 0.7,
   tolerance: 0.2,
-  basis: { sightEdgeHeight: seen(0.8) },
+  basis: { sightEdgeHeight: judged('the picture must clear the wall behind 12 of rebate') },
   members: UPLAND_MEMBERS,
 }
 
@@ -84,12 +89,22 @@ export const PEBBLES: Section = {
   backSplay: SQUARE_BACK,
   gesso: 0,
   tolerance: 0.15,
-  basis: { sightEdgeHeight: seen(0.6) },
+  basis: { sightEdgeHeight: judged('5 of lip over a board of 4 and its fixings') },
   members: [
     { kind: 'fillet', width: 6, rise: 0, ...because(seen(0.3)) },
-    { kind: 'splay', width: 8, rise: 5, ...because(seen(0.3), seen(0.7)) },
+    {
+      kind: 'splay',
+      width: 8,
+      rise: 5,
+      ...because(seen(0.3), judged('from the shadow it throws on the sight edge')),
+    },
     { kind: 'fillet', width: 24, rise: 0, ...because(seen(0.3)) },
-    { kind: 'scotia', width: 12, rise: 4, ...because(seen(0.3), seen(0.6)) },
+    {
+      kind: 'scotia',
+      width: 12,
+      rise: 4,
+      ...because(seen(0.3), judged('from the shadow of its outer edge')),
+    },
     { kind: 'fillet', width: 10, rise: 0, ...because(seen(0.3)) },
     { kind: 'splay', width: 4, rise: -5, ...because(seen(0.4), judged('as the sight edge is eased')) },
   ],
