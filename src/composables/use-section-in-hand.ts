@@ -37,5 +37,11 @@ export function useSectionInHand(commissionId: MaybeRefOrGetter<string>) {
     const isSound = section.members.length > 0 && faultsOfSection(section).length === 0
     return isSound ? { section, from: 'the draft', isDraft: true } : undefined
   })
-  return { inHand, issues, issue, isAsking, failure, askAgain }
+  /** Whether it is known what there is: only then may a page say that there is none. */
+  const isKnown = computed(
+    () =>
+      inHand.value !== undefined ||
+      (issues.value?.length === 0 && (draft.value !== undefined || !session.mayDo('draft.read'))),
+  )
+  return { inHand, isKnown, issues, issue, isAsking, failure, askAgain }
 }

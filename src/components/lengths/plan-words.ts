@@ -8,7 +8,8 @@ export interface PlanPrinters {
 
 /** What the plan costs or opens, and how surely nothing does with less. “No plan needs fewer” is said only where it is proven. */
 export function planWordsOf(list: CutListView, { length, lengthWord, currency }: PlanPrinters): string {
-  const { count, cost, proven } = list
+  const { count, proven } = list
+  const cost = Number(list.cost ?? 0) === 0 ? undefined : list.cost
   const opened = `${count} ${lengthWord(count)}${cost ? ` for ${cost} ${currency}` : ''}.`
   if (proven)
     return `${opened} ${cost ? 'No plan costs less: it is proven.' : 'No plan needs fewer: it is proven.'}`
