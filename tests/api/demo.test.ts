@@ -5,10 +5,13 @@ import type { DraftSection } from '@shared/section'
 import { filledDemo, signedInAs } from '../helpers/demo'
 import type { FilledDemo } from '../helpers/demo'
 
+/** The fill is some two thousand statements, one after the other: seconds on a quiet machine, minutes on a loaded one. */
+const FILL_MS = 240_000
+
 let demo: FilledDemo
 beforeAll(async () => {
   demo = await filledDemo()
-}, 60_000)
+}, FILL_MS)
 afterAll(() => demo.stop())
 
 const EVERYBODY = [
