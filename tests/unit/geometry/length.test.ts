@@ -64,7 +64,7 @@ describe('segmentLengthOf', () => {
   })
 
   it.each(ACCURACIES)('of half an ellipse within %d mm, however thin', (accuracyMm) => {
-    for (const semiY of [10, 7, 1, 0.05]) {
+    for (const semiY of [10, 7, 1, 0.05, 2e-3, 2e-4, 1e-5]) {
       const half = ellipseFrom({
         centre: at(0, 0),
         semiX: 10,
@@ -74,6 +74,22 @@ describe('segmentLengthOf', () => {
         sweepRad: Math.PI,
       })
       expectWithin(segmentLengthOf(half, { accuracyMm }), ellipsePerimeter(10, semiY) / 2, {
+        withinMm: accuracyMm + 1e-12,
+      })
+    }
+  })
+
+  // at its end it turns within its thinness, which every halving finds a little more of
+  it.each(ACCURACIES)('of a quarter ellipse as thin as a hair within %d mm', (accuracyMm) => {
+    for (const semiX of [0.1, 0.03, 0.01, 0.002, 1e-3, 3e-4]) {
+      const hair = ellipseFrom({
+        centre: at(0, 0),
+        semiX,
+        semiY: 98.142,
+        startRad: -Math.PI / 2,
+        sweepRad: -Math.PI / 2,
+      })
+      expectWithin(segmentLengthOf(hair, { accuracyMm }), ellipsePerimeter(98.142, semiX) / 4, {
         withinMm: accuracyMm + 1e-12,
       })
     }
