@@ -1,4 +1,4 @@
-import type { DraftStepInput, DraftView } from '@shared/contracts'
+import type { DraftStepInput } from '@shared/contracts'
 import { Failure } from '@shared/failure'
 import {
   batchInHand,
@@ -10,7 +10,7 @@ import {
   sessionFrom,
   baseOf,
 } from './draft-session'
-import type { DraftSession, KeptWork, Trouble } from './draft-session'
+import type { DraftBase, DraftSession, DraftWithHistory, KeptWork, Trouble } from './draft-session'
 
 /** What a saver needs of the world around it. */
 export interface SaverPorts {
@@ -18,9 +18,9 @@ export interface SaverPorts {
     readonly version: number
     readonly operationId: string
     readonly steps: DraftStepInput[]
-  }) => Promise<DraftView>
+  }) => Promise<DraftBase>
   /** The draft that a stale refusal carries. */
-  readonly currentOf: (failure: Failure) => DraftView | undefined
+  readonly currentOf: (failure: Failure) => DraftWithHistory | undefined
   readonly keep: (work: KeptWork | undefined) => void
   readonly makeOperationId: () => string
   /** Calls back after so many ms; gives the way to call it off. */
@@ -41,7 +41,7 @@ export interface DraftSaver {
   readonly flush: () => Promise<void>
   /** After a refusal: draws one's own steps on what the server has; gives the names of those that could not be. */
   readonly putMineOnTop: () => readonly string[]
-  readonly throwMineAway: (current: DraftView) => void
+  readonly throwMineAway: (current: DraftBase) => void
   readonly stop: () => void
 }
 

@@ -4,7 +4,12 @@ import { applyEdit } from '@shared/section'
 import type { DraftSection, SectionEdit } from '@shared/section'
 
 /** The draft as the server last gave it. */
-export type DraftBase = Pick<DraftView, 'version' | 'document' | 'undo' | 'redo'>
+export interface DraftBase extends Pick<DraftView, 'version' | 'undo' | 'redo'> {
+  readonly document: DraftSection
+}
+
+/** The same with the steps that led to it. */
+export type DraftWithHistory = DraftBase & Pick<DraftView, 'history'>
 
 /** A step on its way to the server, and what it did here; a step of the server's own history does nothing here until it answers. */
 export interface QueuedStep {
@@ -29,7 +34,7 @@ interface TakenStep {
 /** Why what was drawn is not saved. All of it is kept meanwhile. */
 export type Trouble =
   | { readonly kind: 'out-of-reach'; readonly says: string }
-  | { readonly kind: 'stale'; readonly current: DraftView }
+  | { readonly kind: 'stale'; readonly current: DraftWithHistory }
   | { readonly kind: 'refused'; readonly says: string }
 
 /** A draft being drawn: what the server has, what is drawn here, and what is on its way. Every function below gives a new one. */

@@ -44,13 +44,16 @@ export interface Scene {
   readonly close: () => void
 }
 
+/** The file that leaves out the script language has no types of its own: those of the whole serve. */
+const library = paperCore as unknown as paper.PaperScope
+
 /** How near to a break a finger or pointer must come, CSS pixels: a target of 24. */
 const BREAK_REACH = 12
 const FACE_REACH = 6
 
 /** The drawing on a canvas. The paper library draws and finds what was hit; nothing is ever measured from it. */
 export function sceneOn(canvas: HTMLCanvasElement, palette: Palette): Scene {
-  const scope = new paperCore.PaperScope()
+  const scope = new library.PaperScope()
   scope.setup(canvas)
   scope.view.autoUpdate = false
   const photograph = photographPart(scope, () => void scope.view.update())

@@ -35,11 +35,11 @@ export function usePhotographUnder(
     ([id], before) => {
       const photograph = chosen.value
       lay.value = photograph && (keptLay.value ?? firstLay(photograph.width, photograph.height))
-      if (id !== before?.[0]) void show(photograph)
+      if (id !== before?.[0]) void fetchImage(photograph)
     },
   )
 
-  async function show(photograph: PhotographView | undefined): Promise<void> {
+  async function fetchImage(photograph: PhotographView | undefined): Promise<void> {
     image.value = undefined
     imageFault.value = undefined
     if (photograph === undefined) return
@@ -72,6 +72,14 @@ export function usePhotographUnder(
   function choose(id: string | undefined): void {
     chosenId.value = chosenId.value === id ? undefined : id
     isLaying.value = false
+  }
+  /** 0 … 1 */
+  function show(strength: number): void {
+    opacity.value = strength
+  }
+  /** Takes it in hand, so that pointer and arrows move it and not the drawing. */
+  function take(inHand: boolean): void {
+    isLaying.value = inHand
   }
   function moveBy(byMm: Point): void {
     if (lay.value !== undefined && mmPerPixel.value !== undefined)
@@ -110,6 +118,8 @@ export function usePhotographUnder(
     isKeeping: keeping.isRunning,
     failure: keeping.failure,
     choose,
+    show,
+    take,
     moveBy,
     turnTo,
     mirror,

@@ -24,6 +24,9 @@ const FLAGS = [
   '--disable-sync',
 ]
 
+/** On a busy machine things take their time. */
+const eventually = <Value>(ask: () => Value) => expect.poll(ask, { timeout: 20_000 })
+
 let browser: Browser
 let server: Server
 let address: string
@@ -125,7 +128,7 @@ describe('drawing by the keyboard alone', () => {
     await page.keyboard.press('ArrowRight')
     await page.keyboard.press('Shift+ArrowRight')
     await page.keyboard.press('Alt+ArrowUp')
-    await expect.poll(async () => placeIn(await said()).x).toBe(before.x + 5.5)
+    await eventually(async () => placeIn(await said()).x).toBe(before.x + 5.5)
     expectWithin(placeIn(await said()).y, before.y + 0.05, { withinMm: 1e-6 })
     await saved()
     const member = (await draftOf(id)).document.members[1]
@@ -142,11 +145,11 @@ describe('drawing by the keyboard alone', () => {
     await saved()
     await page.reload()
     const undo = page.getByRole('button', { name: /^Undo/ })
-    await expect.poll(() => undo.innerText()).toContain('Put in bead')
+    await eventually(() => undo.innerText()).toContain('Put in bead')
     await undo.press('Enter')
-    await expect.poll(() => undo.innerText()).toContain('Take out torus')
+    await eventually(() => undo.innerText()).toContain('Take out torus')
     await undo.press('Enter')
-    await expect.poll(async () => (await draftOf(id)).document).toEqual(SOUND_SECTION)
+    await eventually(async () => (await draftOf(id)).document).toEqual(SOUND_SECTION)
   })
 })
 
@@ -174,7 +177,7 @@ describe('drawing by the mouse', () => {
     await page.mouse.move(from.x + 40, from.y - 9, { steps: 5 })
     await page.keyboard.press('Escape')
     await page.mouse.up()
-    await expect.poll(async () => placeIn(await said())).toEqual(before)
+    await eventually(async () => placeIn(await said())).toEqual(before)
 
     await page.mouse.move(from.x, from.y)
     await page.mouse.down()
@@ -194,9 +197,9 @@ describe('drawing by the mouse', () => {
     const first = await grip()
     await page.mouse.move(first.x - 60, first.y + 60)
     await page.mouse.wheel(0, -500)
-    await expect.poll(async () => (await grip()).x).toBeGreaterThan(first.x + 10)
+    await eventually(async () => (await grip()).x).toBeGreaterThan(first.x + 10)
     await page.getByRole('button', { name: 'Whole section' }).click()
-    await expect.poll(async () => Math.round((await grip()).x)).toBe(Math.round(first.x))
+    await eventually(async () => Math.round((await grip()).x)).toBe(Math.round(first.x))
     await page.mouse.click(first.x + 40, first.y + 80)
     await expect
       .poll(() => page.locator('.rule__cell[aria-pressed="true"]').getAttribute('aria-label'))
@@ -212,7 +215,7 @@ describe('what cannot be saved', () => {
     await putIn('bead').click()
     await page.getByText('Not saved: kept here').waitFor()
     await page.reload()
-    await expect.poll(() => cells().count()).toBe(SOUND_SECTION.members.length + 1)
+    await eventually(() => cells().count()).toBe(SOUND_SECTION.members.length + 1)
     expect((await draftOf(id)).version).toBe(1)
     await page.unroute('**/draft/edits')
     await saved()

@@ -1,12 +1,11 @@
 import { describe, expect, it } from 'vitest'
-import type { DraftView } from '@shared/contracts'
 import { Failure } from '@shared/failure'
 import { applyEdit } from '@shared/section'
 import type { DraftSection } from '@shared/section'
 import { draftSaver } from '@/board/draft-saver'
 import type { SaverPorts } from '@/board/draft-saver'
 import { sessionFrom, stepTaken } from '@/board/draft-session'
-import type { DraftSession, KeptWork } from '@/board/draft-session'
+import type { DraftSession, DraftWithHistory, KeptWork } from '@/board/draft-session'
 
 const BARE: DraftSection = {
   sightEdgeHeight: 30,
@@ -26,7 +25,7 @@ function bench(refuse: (request: Request, time: number) => Failure | undefined =
   const asked: Request[] = []
   const timers: { readonly ms: number; readonly act: () => void }[] = []
   let kept: KeptWork | undefined
-  const view = (): DraftView => ({ version, document, undo: null, redo: null, history: [] })
+  const view = (): DraftWithHistory => ({ version, document, undo: null, redo: null, history: [] })
   const saver = draftSaver(sessionFrom({ version, document, undo: null, redo: null }), {
     send: async (request) => {
       asked.push(request)
@@ -37,7 +36,7 @@ function bench(refuse: (request: Request, time: number) => Failure | undefined =
       return view()
     },
     currentOf: (failure) =>
-      failure.code === 'version-stale' ? (failure.details.draft as DraftView) : undefined,
+      failure.code === 'version-stale' ? (failure.details.draft as DraftWithHistory) : undefined,
     keep: (work) => (kept = work),
     makeOperationId: () => `op-${(ids += 1)}`,
     after: (ms, act) => {
@@ -109,7 +108,7 @@ describe('a server out of reach', () => {
 })
 
 describe('a save from an older version', () => {
-  const theirs: DraftView = {
+  const theirs: DraftWithHistory = {
     version: 7,
     document: { ...BARE, tolerance: 0.5 },
     undo: 'tolerance',
