@@ -83,7 +83,7 @@ async function openBoard(id: string, on: Page = page): Promise<void> {
   await on.getByRole('button', { name: /^Break 0/ }).waitFor({ state: 'attached' })
 }
 const draftOf = async (id: string) => (await designer.get(`/commissions/${id}/draft`)).body
-const saved = () => page.getByRole('status').filter({ hasText: 'Saved' }).waitFor()
+const saved = () => page.getByText('Saved', { exact: true }).waitFor()
 const cells = () => page.locator('.rule__cell')
 const handle = () => page.getByRole('button', { name: /^Break \d/ })
 const said = async () => (await handle().getAttribute('aria-label')) ?? ''
