@@ -27,6 +27,22 @@ function inLibrary(path: Path, isClosed: boolean): InstanceType<typeof paper.Pat
   return own
 }
 
+/** A form of arcTo that the library has and its types leave out: end, radii, rotation, clockwise, large. */
+interface EllipticArcs {
+  arcTo(
+    to: InstanceType<typeof paper.Point>,
+    radius: InstanceType<typeof paper.Size>,
+    rotation: number,
+    isClockwise: boolean,
+    isLarge: boolean,
+  ): void
+}
+
+/** A form of the library's arcTo that its types leave out. */
+interface FlaggedArcs {
+  arcTo(to: object, radius: object, rotation: number, clockwise: boolean, large: boolean): void
+}
+
 function addTo(own: InstanceType<typeof paper.Path>, segment: Segment): void {
   const to = new paper.Point(segment.end.x, segment.end.y)
   switch (segment.kind) {
@@ -39,7 +55,7 @@ function addTo(own: InstanceType<typeof paper.Path>, segment: Segment): void {
     case 'ellipse': {
       // the library's arcs by the flags of vector graphics: radii, rotation, clockwise (y down there, up here), large
       const radius = new paper.Size(segment.semiX, segment.semiY)
-      return own.arcTo(to, radius, 0, segment.sweepRad > 0, false)
+      return (own as unknown as EllipticArcs).arcTo(to, radius, 0, segment.sweepRad > 0, false)
     }
     default: {
       const { control1, control2 } = segment
