@@ -38,11 +38,6 @@ interface EllipticArcs {
   ): void
 }
 
-/** A form of the library's arcTo that its types leave out. */
-interface FlaggedArcs {
-  arcTo(to: object, radius: object, rotation: number, clockwise: boolean, large: boolean): void
-}
-
 function addTo(own: InstanceType<typeof paper.Path>, segment: Segment): void {
   const to = new paper.Point(segment.end.x, segment.end.y)
   switch (segment.kind) {
