@@ -6,17 +6,26 @@ export interface FillRequest {
   readonly values: readonly number[]
   readonly counts: readonly number[]
   readonly capacity: number
+  readonly effort: FillEffort
+}
+
+export interface FillEffort {
+  /** How far below the best the answer may lie, as a share of it. */
+  readonly slack: number
+  /** Branches tried; past them the answer is what was found and the upper bound the fractional one. */
+  readonly branches: number
 }
 
 export interface Fill {
   readonly value: number
-  /** No filling is worth more than this; the value itself to one part in 10⁹ unless the search was cut short. */
+  /** No filling is worth more than this. */
   readonly upper: number
   readonly counts: readonly number[]
 }
 
-const RELATIVE_SLACK = 1e-9
-const NODES_AT_MOST = 20_000
+/** To find a good filling quickly, and to bound the best one closely. */
+export const ROUGHLY: FillEffort = { slack: 1e-4, branches: 2000 }
+export const CLOSELY: FillEffort = { slack: 1e-7, branches: 20_000 }
 
 interface Search extends FillRequest {
   readonly order: readonly number[]
@@ -36,8 +45,8 @@ export function bestFillOf(request: FillRequest): Fill {
   const none = spans.map(() => 0)
   const search: Search = { ...request, order, taken: [...none], best: 0, bestCounts: none, nodes: 0 }
   branch(search, 0, capacity, 0)
-  const isWhole = search.nodes <= NODES_AT_MOST
-  const upper = isWhole ? search.best * (1 + RELATIVE_SLACK) : fractionalFill(search, 0, capacity)
+  const isWhole = search.nodes <= request.effort.branches
+  const upper = isWhole ? search.best * (1 + request.effort.slack) : fractionalFill(search, 0, capacity)
   return { value: search.best, upper, counts: search.bestCounts }
 }
 
@@ -48,8 +57,8 @@ function branch(search: Search, place: number, room: number, value: number): voi
   }
   search.nodes += 1
   const kind = search.order[place]
-  if (kind === undefined || search.nodes > NODES_AT_MOST) return
-  if (value + fractionalFill(search, place, room) <= search.best * (1 + RELATIVE_SLACK)) return
+  if (kind === undefined || search.nodes > search.effort.branches) return
+  if (value + fractionalFill(search, place, room) <= search.best * (1 + search.effort.slack)) return
   const span = search.spans[kind]!
   const most = Math.min(search.counts[kind]!, Math.floor(room / span))
   for (let count = most; count >= 0; count -= 1) {

@@ -1,5 +1,5 @@
-import { bestFillOf } from './best-fill'
-import type { Fill } from './best-fill'
+import { CLOSELY, bestFillOf } from './best-fill'
+import type { Fill, FillRequest } from './best-fill'
 import type { StockModel } from './stock-model'
 
 /**
@@ -40,8 +40,7 @@ export function worthOf(
 export function bestFillOn(
   model: StockModel,
   stock: number,
-  values: readonly number[],
-  counts: readonly number[],
+  { values, counts, effort }: Pick<FillRequest, 'values' | 'counts' | 'effort'>,
 ): Fill {
   const { kinds, stocks } = model
   const { usable } = stocks[stock]!
@@ -52,6 +51,7 @@ export function bestFillOn(
       values,
       counts: counts.map((count, kind) => (kinds[kind]!.gap >= leastGap ? count : 0)),
       capacity: usable + leastGap,
+      effort,
     }),
   )
   const best = fills.reduce((one, other) => (other.value > one.value ? other : one))
@@ -75,7 +75,10 @@ export function dualPricesFrom(
     Math.floor(GREATEST_WORTH / 16 / Math.max(1, total, railCount * Math.max(0, ...costs))),
   )
   const worth = prices.map((price) => Math.max(0, Math.floor(price * scale)))
-  const fullest = stocks.map((_, stock) => Math.ceil(bestFillOn(model, stock, worth, demand).upper) + 1)
+  const fullest = stocks.map(
+    (_, stock) =>
+      Math.ceil(bestFillOn(model, stock, { values: worth, counts: demand, effort: CLOSELY }).upper) + 1,
+  )
   const share = stocks.reduce(
     (least, { isUnlimited }, stock) =>
       isUnlimited ? Math.min(least, (costs[stock]! * scale) / fullest[stock]!) : least,

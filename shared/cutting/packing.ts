@@ -1,3 +1,4 @@
+import { ROUGHLY } from './best-fill'
 import { fillingsOf } from './fillings'
 import { takenByPattern } from './pattern'
 import type { Pattern } from './pattern'
@@ -60,7 +61,7 @@ function addWorthsFor({ model, worths, counter }: PackingSearch, { demand, piece
     { model: { ...model, stocks: scarce }, costs, demand, available: pieces },
     counter,
   )
-  const found = worthsFrom(model, relaxed.prices)
+  const found = worthsFrom(model, relaxed.prices, ROUGHLY)
   if (found !== undefined && slackOf(found, demand, pieces) < 0) worths.push(found)
 }
 

@@ -23,17 +23,3 @@ export function takenByPattern({ kinds }: StockModel, counts: readonly number[])
   })
   return taken === 0 ? 0 : taken - leastGap
 }
-
-/** Demand that is left when the patterns have been cut. */
-export function demandAfter({ kinds }: StockModel, patterns: readonly Pattern[]): number[] {
-  const left = kinds.map(({ demand }) => demand)
-  for (const { counts } of patterns) counts.forEach((count, kind) => (left[kind]! -= count))
-  return left
-}
-
-/** Pieces that are left of each stock. */
-export function availableAfter({ stocks }: StockModel, patterns: readonly Pattern[]): number[] {
-  const left = stocks.map(({ limit }) => limit)
-  for (const { stock } of patterns) left[stock]! -= 1
-  return left
-}

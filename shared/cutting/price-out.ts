@@ -1,3 +1,4 @@
+import { ROUGHLY } from './best-fill'
 import { bestFillOn } from './dual-prices'
 import type { Pattern } from './pattern'
 import { improve, rowPricesOf, simplexFrom } from './simplex'
@@ -109,7 +110,7 @@ function addBestPatterns(master: Master): number {
     if (available[stock]! <= 0) return
     const row = rowOfStock[stock]!
     const asked = costs[stock]! / dearest - (row < 0 ? 0 : rowPrices[row]!)
-    const fill = bestFillOn(model, stock, values, demand)
+    const fill = bestFillOn(model, stock, { values, counts: demand, effort: ROUGHLY })
     if (fill.value <= asked + GAIN_NOISE) return
     addPattern(master, { stock, counts: fill.counts })
     added += 1

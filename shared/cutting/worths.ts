@@ -1,3 +1,5 @@
+import { CLOSELY } from './best-fill'
+import type { FillEffort } from './best-fill'
 import { bestFillOn } from './dual-prices'
 import type { StockModel } from './stock-model'
 
@@ -14,13 +16,17 @@ export interface Worths {
 const TOTAL_WORTH = 2 ** 38
 
 /** Rounds floating prices to worths; undefined where they are all nothing. */
-export function worthsFrom(model: StockModel, prices: readonly number[]): Worths | undefined {
+export function worthsFrom(
+  model: StockModel,
+  prices: readonly number[],
+  effort: FillEffort = CLOSELY,
+): Worths | undefined {
   const demand = model.kinds.map((kind) => kind.demand)
   const total = demand.reduce((sum, count, kind) => sum + count * prices[kind]!, 0)
   if (!(total > 0)) return undefined
   const worth = prices.map((price) => Math.max(0, Math.floor((price / total) * TOTAL_WORTH)))
   const fullest = model.stocks.map(
-    (_, stock) => Math.floor(bestFillOn(model, stock, worth, demand).upper) + 1,
+    (_, stock) => Math.floor(bestFillOn(model, stock, { values: worth, counts: demand, effort }).upper) + 1,
   )
   return { worth, fullest }
 }

@@ -58,3 +58,34 @@ export const anySmallInstance = (): fc.Arbitrary<CutInstance> =>
       })),
       saw,
     }))
+
+/** What a workshop cuts in a day: up to six frames of four rails, from two priced lengths and a few pieces of the rack. */
+export const anyDaysWork = (): fc.Arbitrary<CutInstance> =>
+  fc
+    .record({
+      frames: fc.array(fc.tuple(anySide(), anySide()), { minLength: 1, maxLength: 6 }),
+      rack: fc.array(fc.integer({ min: 4000, max: 24_000 }), { maxLength: 4 }),
+      isPriced: fc.boolean(),
+    })
+    .map(({ frames, rack, isPriced }) => ({
+      demand: frames.flatMap(([width, height], index) =>
+        (['top', 'right', 'bottom', 'left'] as const).map((side, place) => ({
+          id: `F${index}-${side}`,
+          length: place % 2 === 0 ? width : height,
+          count: 1,
+          mitre: 45,
+          frame: `F${index}`,
+          side,
+        })),
+      ),
+      lengths: [
+        { length: 2440, ...(isPriced ? { price: '18.50' } : {}) },
+        { length: 3660, ...(isPriced ? { price: '26.00' } : {}) },
+      ],
+      rack: rack.map((tenths, index) => ({ id: `R-${index}`, length: tenths / 10 })),
+      saw: { kerf: 3.2, margin: 2, endTrim: 75, shortestSafe: 200, smallestUsableOffcut: 400 },
+      order: { setupPieces: 2, firstOff: 300, reserve: 0.1 },
+    }))
+
+/** A rail's long point, in tenths of a millimetre, mm. */
+const anySide = () => fc.integer({ min: 3000, max: 12_000 }).map((tenths) => tenths / 10)
