@@ -96,7 +96,8 @@ function greatestOff(samples: readonly Point[], piece: ArcOrLine): number {
 }
 
 /**
- * Distance of a point from an arc's circle or a line's carrier, mm. With the chord's half length h, u along it and w to its
+ * Distance of a point from an arc or a line, mm: from its circle or carrier where the foot lies on the piece itself, else from
+ * its nearer end (a curve that doubles back may pass close to a circle far beyond the arc). With the chord's half length h, u along it and w to its
  * left from its middle, the circle of bulge b is b·(u² + w² − h²) − h·w·(1 − b²) = 0. Everything is kept multiplied by b, so
  * that flat arcs, whose centres run away, come out as exactly as round ones.
  */
@@ -108,14 +109,27 @@ function offPiece(point: Point, piece: ArcOrLine): number {
   const fromMiddle = { x: point.x - (start.x + end.x) / 2, y: point.y - (start.y + end.y) / 2 }
   const u = dot(fromMiddle, chord) / length
   const w = (chord.x * fromMiddle.y - chord.y * fromMiddle.x) / length
-  if (piece.kind === 'line') return Math.abs(w)
-  const b = piece.bulge
   const h = length / 2
+  if (piece.kind === 'line') return Math.hypot(Math.max(0, Math.abs(u) - h), w)
+  const b = piece.bulge
+  if (!isBesideArc({ x: u, y: w }, b, h)) return Math.hypot(Math.abs(u) - h, w)
   const power = b * (u * u + w * w - h * h) - h * w * (1 - b * b)
   // power = b·(ρ² − R²), ρ from the centre, and |b|·R = h·(1 + b²)/2: hence |ρ − R| = |power| / (|b|·ρ + |b|·R).
   const reach = (h * (1 + b * b)) / 2
   const toCentre = Math.hypot(b * u, b * w - (h * (1 - b * b)) / 2)
   return Math.abs(power) / (toCentre + reach)
+}
+
+/**
+ * Whether a point, in the axes of the arc's chord from its middle, lies in the wedge that the arc spans from its centre. The
+ * vectors from the centre are kept multiplied by b, so that a flat arc's far centre does no harm.
+ */
+function isBesideArc(point: Point, b: number, h: number): boolean {
+  const centre = (h * (1 - b * b)) / 2
+  const to = { x: b * point.x, y: b * point.y - centre }
+  const afterStart = Math.sign(b) * (-b * h * to.y + centre * to.x)
+  const beforeEnd = Math.sign(b) * (-centre * to.x - b * h * to.y)
+  return Math.abs(b) < 1 ? afterStart >= 0 && beforeEnd >= 0 : afterStart >= 0 || beforeEnd >= 0
 }
 
 /** A flat arc as a line: within flatMm of its chord. */
