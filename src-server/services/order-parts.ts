@@ -96,7 +96,7 @@ interface MillTextOf {
 
 /** What the sheet says to the mill. */
 export function millTextOf({ document, mill, number, unit }: MillTextOf): MillText {
-  const length = (mm: number) => printLength(mm, { unit })
+  const length = (mm: number) => printLength(mm, { unit, places: 1 })
   return {
     orderNumber: number,
     mill: mill.name,
@@ -117,4 +117,4 @@ export function millTextOf({ document, mill, number, unit }: MillTextOf): MillTe
 }
 
 export const lengthsText = ({ lengths }: Pick<OrderInput, 'lengths'>, unit: LengthUnit): string =>
-  lengths.map(({ length, count }) => `${count} of ${printLength(length, { unit })}`).join(', ')
+  lengths.map(({ length, count }) => `${count} of ${printLength(length, { unit, places: 1 })}`).join(', ')
