@@ -12,7 +12,7 @@ import {
   tangentAt,
 } from '@shared/geometry'
 import type { Path, Point } from '@shared/geometry'
-import { correctedOutline, knifeFaceDepth, knifeHeadFrom } from '@shared/knife'
+import { findDepthRefusal, correctedOutline, knifeFaceDepth, knifeHeadFrom } from '@shared/knife'
 import type { ArcOrLine, KnifeHead } from '@shared/knife'
 import { KNIFE_OUTLINE_MM } from '@shared/units'
 import { EVERY_KIND_FACE } from '../../helpers/knife-faces'
@@ -137,8 +137,9 @@ describe('correctedOutline', () => {
     fc.assert(
       fc.property(face, hookDeg, fc.double({ min: 120, max: 220, noNaN: true }), (curve, hook, diameter) => {
         const head = knifeHeadFrom(diameter, hook)
-        const fitted = pathOf([curve], head)
         const { min, max } = boundsOf(curve)
+        fc.pre(findDepthRefusal(head, max.y - min.y) === undefined)
+        const fitted = pathOf([curve], head)
         for (let step = 0; step <= 60; step += 1) {
           const { x, y } = pointAt(curve, step / 60)
           const depthMm = Math.min(max.y - min.y, Math.max(0, max.y - y))
