@@ -1,4 +1,4 @@
-import { z } from 'zod'
+import type { z } from 'zod'
 import { Failure } from '@shared/failure'
 import type { Fault } from '@shared/failure'
 import { faultsOf } from './faults'
